@@ -1,0 +1,2 @@
+export * from './lead-time.js';
+export * from './reorder.js';
