@@ -1,0 +1,28 @@
+import { Module } from '@nestjs/common';
+import { EventsRepository } from './events.repository.js';
+import { FactsRepository } from './facts.repository.js';
+import { NeedsYouController } from './needs-you.controller.js';
+import { NeedsYouService } from './needs-you.service.js';
+import { RecipientsRepository } from './recipients.repository.js';
+import { SweepRepository } from './sweep.repository.js';
+import { SweepTimer } from './sweep-timer.js';
+import { Sweeper } from './sweeper.js';
+import { WarningMails } from './warning-mails.service.js';
+import { WarningsService } from './warnings.service.js';
+
+@Module({
+  controllers: [NeedsYouController],
+  providers: [
+    WarningsService,
+    WarningMails,
+    FactsRepository,
+    EventsRepository,
+    RecipientsRepository,
+    Sweeper,
+    SweepRepository,
+    SweepTimer,
+    NeedsYouService,
+  ],
+  exports: [WarningsService, Sweeper],
+})
+export class AlertsModule {}

@@ -1,0 +1,12 @@
+export {
+  Choice,
+  Flag,
+  Id,
+  Instant,
+  LocalDateField,
+  MailAddress,
+  Text,
+  WholeNumber,
+} from './scalar-fields.js';
+export { ListOf, ListOfChoices, ListOfIds, Nested, OpenObject } from './nested-fields.js';
+export type { FieldOptions } from './field-options.js';

@@ -1,0 +1,20 @@
+import { Injectable } from '@nestjs/common';
+import { darkrooms } from '@wetside/db';
+import { eq, sql } from 'drizzle-orm';
+import type { Tx } from '../database/database.js';
+
+/** When the sweep must look at a darkroom again. Its row is the last lock of every transaction. */
+@Injectable()
+export class NextCheck {
+  /**
+   * Says that something falls due at that time. Always written, even where the sweep would look sooner: only then does
+   * a sweep that is at work wait for this transaction instead of passing over what it has not seen.
+   */
+  async lower(tx: Tx, darkroomId: string, due: Date | null): Promise<void> {
+    if (due === null) return;
+    await tx
+      .update(darkrooms)
+      .set({ nextCheckAt: sql`least(${darkrooms.nextCheckAt}, ${due.toISOString()}::timestamptz)` })
+      .where(eq(darkrooms.id, darkroomId));
+  }
+}

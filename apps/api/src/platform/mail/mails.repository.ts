@@ -1,0 +1,91 @@
+import { Injectable } from '@nestjs/common';
+import { events, mails, memberships, notices } from '@wetside/db';
+import { and, eq, isNull, lte, or, sql } from 'drizzle-orm';
+import type { Tx } from '../database/database.js';
+
+export type MailRow = typeof mails.$inferSelect;
+
+/** One mail in one darkroom. */
+export interface MailKey {
+  darkroomId: string;
+  mailId: string;
+}
+
+const isIt = ({ darkroomId, mailId }: MailKey) => and(eq(mails.darkroomId, darkroomId), eq(mails.id, mailId));
+
+/** Waiting and due, or leased by somebody who is gone. */
+export const isDue = (now: Date) =>
+  or(
+    and(eq(mails.state, 'waiting'), lte(mails.dueAt, now)),
+    and(eq(mails.state, 'leased'), lte(mails.leaseUntil, now)),
+  );
+
+@Injectable()
+export class MailsRepository {
+  /** The mail when it can be sent now, locked; null when another is at it or it is not due. */
+  async takeDue(tx: Tx, key: MailKey, now: Date): Promise<MailRow | null> {
+    const [row] = await tx
+      .select()
+      .from(mails)
+      .where(and(isIt(key), isDue(now)))
+      .for('update', { skipLocked: true });
+    return row ?? null;
+  }
+
+  /** When it falls due, for a mail that waits; null for any other. */
+  async waitsUntil(tx: Tx, key: MailKey): Promise<Date | null> {
+    const [row] = await tx
+      .select({ dueAt: mails.dueAt })
+      .from(mails)
+      .where(and(isIt(key), eq(mails.state, 'waiting')));
+    return row?.dueAt ?? null;
+  }
+
+  /** Why a warning is not to be sent after all: nothing that it tells of holds, or its reader has left; null: send it. */
+  async whyNot(tx: Tx, { darkroomId, mailId }: MailKey): Promise<string | null> {
+    const [open] = await tx
+      .select({ leftAt: memberships.leftAt })
+      .from(notices)
+      .innerJoin(events, and(eq(events.darkroomId, notices.darkroomId), eq(events.id, notices.eventId)))
+      .innerJoin(
+        memberships,
+        and(eq(memberships.darkroomId, notices.darkroomId), eq(memberships.id, notices.membershipId)),
+      )
+      .where(and(eq(notices.darkroomId, darkroomId), eq(notices.mailId, mailId), isNull(events.endedAt)))
+      .limit(1);
+    if (!open) return 'the condition had ended';
+    return open.leftAt === null ? null : 'its reader had left the darkroom';
+  }
+
+  async withdraw(tx: Tx, key: MailKey, because: string): Promise<void> {
+    await tx
+      .update(mails)
+      .set({ state: 'withdrawn', withdrawnBecause: because, leaseId: null, leaseUntil: null })
+      .where(isIt(key));
+  }
+
+  async lease(tx: Tx, key: MailKey, lease: { leaseId: string; leaseUntil: Date }): Promise<void> {
+    await tx
+      .update(mails)
+      .set({ state: 'leased', ...lease, attempts: sql`${mails.attempts} + 1` })
+      .where(isIt(key));
+  }
+
+  /**
+   * What came of a try, if the lease is still one's own.
+   * @returns false when another has taken the mail over
+   */
+  async settle(
+    tx: Tx,
+    key: MailKey,
+    leaseId: string,
+    outcome: Partial<Pick<MailRow, 'state' | 'dueAt' | 'sentAt' | 'lastAnswer'>>,
+  ): Promise<boolean> {
+    const changed = await tx
+      .update(mails)
+      .set({ ...outcome, leaseId: null, leaseUntil: null })
+      .where(and(isIt(key), eq(mails.state, 'leased'), eq(mails.leaseId, leaseId)))
+      .returning({ id: mails.id });
+    return changed.length > 0;
+  }
+}

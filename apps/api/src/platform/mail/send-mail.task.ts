@@ -1,0 +1,109 @@
+import { Injectable, Logger, type OnModuleInit } from '@nestjs/common';
+import { randomUUID } from 'node:crypto';
+import { Clock } from '../clock/clock.js';
+import { Database } from '../database/database.js';
+import { JobTasks } from '../jobs/job-tasks.js';
+import { NextCheck } from '../jobs/next-check.js';
+import { waitAfter } from './back-off.js';
+import { MailSettings } from './mail-settings.js';
+import { Mailer } from './mailer.js';
+import { MailsRepository, type MailKey, type MailRow } from './mails.repository.js';
+import { OutgoingMail } from './outgoing-mail.service.js';
+import { parseSendMail, SEND_MAIL } from './send-mail.job.js';
+
+const LEASE_MS = 60_000;
+const ANSWER_LENGTH = 500;
+
+interface Leased {
+  row: MailRow;
+  leaseId: string;
+  /** This try included. */
+  attempts: number;
+}
+
+type Outcome = { ok: boolean; answer: string };
+
+/**
+ * Sends one mail, if it is this one's turn. The queue may name a mail twice, late or never; the row decides. A server
+ * that dies between the end of the mail and the mark leaves a dead lease: the same Message-ID goes out once more.
+ */
+@Injectable()
+export class SendMailTask implements OnModuleInit {
+  private readonly log = new Logger(SendMailTask.name);
+
+  constructor(
+    private readonly tasks: JobTasks,
+    private readonly database: Database,
+    private readonly clock: Clock,
+    private readonly repository: MailsRepository,
+    private readonly mailer: Mailer,
+    private readonly outgoing: OutgoingMail,
+    private readonly nextCheck: NextCheck,
+    private readonly settings: MailSettings,
+  ) {}
+
+  onModuleInit(): void {
+    this.tasks.register(SEND_MAIL, (payload) => this.run(parseSendMail(payload)));
+  }
+
+  async run(key: MailKey): Promise<void> {
+    const leased = await this.lease(key);
+    if (!leased) return;
+    const outcome = await this.speak(leased.row);
+    await this.mark(key, leased, outcome);
+  }
+
+  private lease(key: MailKey): Promise<Leased | null> {
+    return this.database.inDarkroom({ darkroomId: key.darkroomId }, async (tx) => {
+      const now = this.clock.now();
+      const row = await this.repository.takeDue(tx, key, now);
+      if (!row) {
+        const dueAt = await this.repository.waitsUntil(tx, key);
+        // Told too early: the rest of its delay. One that is due and locked is in another's hands.
+        if (dueAt && dueAt > now) await this.outgoing.remind(tx, [{ ...key, id: key.mailId, dueAt }]);
+        return null;
+      }
+      const whyNot = row.kind === 'warning' ? await this.repository.whyNot(tx, key) : null;
+      if (whyNot !== null) {
+        await this.repository.withdraw(tx, key, whyNot);
+        return null;
+      }
+      const leaseId = randomUUID();
+      const leaseUntil = new Date(now.getTime() + LEASE_MS);
+      await this.repository.lease(tx, key, { leaseId, leaseUntil });
+      await this.nextCheck.lower(tx, key.darkroomId, leaseUntil);
+      return { row, leaseId, attempts: row.attempts + 1 };
+    });
+  }
+
+  private async speak(row: MailRow): Promise<Outcome> {
+    try {
+      return { ok: true, answer: await this.mailer.send(row) };
+    } catch (error) {
+      return { ok: false, answer: error instanceof Error ? error.message : String(error) };
+    }
+  }
+
+  private mark(key: MailKey, { row, leaseId, attempts }: Leased, { ok, answer }: Outcome): Promise<void> {
+    return this.database.inDarkroom({ darkroomId: key.darkroomId }, async (tx) => {
+      const now = this.clock.now();
+      const lastAnswer = answer.slice(0, ANSWER_LENGTH);
+      const set = (outcome: Parameters<MailsRepository['settle']>[3]) =>
+        this.repository.settle(tx, key, leaseId, { lastAnswer, ...outcome });
+      if (ok) {
+        await set({ state: 'sent', sentAt: now });
+        return;
+      }
+      const wait = waitAfter(attempts, this.settings.backoffS);
+      this.log.warn(`Mail ${row.messageId}, try ${attempts}: ${lastAnswer}`);
+      if (wait === null) {
+        await set({ state: 'failed' });
+        return;
+      }
+      const dueAt = new Date(now.getTime() + wait);
+      if (!(await set({ state: 'waiting', dueAt }))) return;
+      await this.outgoing.remind(tx, [{ darkroomId: key.darkroomId, id: key.mailId, dueAt }]);
+      await this.nextCheck.lower(tx, key.darkroomId, dueAt);
+    });
+  }
+}

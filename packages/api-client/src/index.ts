@@ -1,0 +1,2 @@
+export * from './client.js';
+export type { components, operations, paths } from './schema.js';
