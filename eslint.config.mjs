@@ -116,6 +116,12 @@ export default tseslint.config(
     },
     rules: { 'boundaries/dependencies': ['error', { default: 'disallow', policies: arrows }] },
   },
+  {
+    // The one place where the platform names features: the union of problem codes is closed there.
+    // Specs may reach for the whole program and its test set-up.
+    files: ['apps/api/src/platform/errors/problem-table.ts', 'apps/api/**/*.spec.ts', 'apps/api/**/*.fixture.ts'],
+    rules: { 'boundaries/dependencies': 'off' },
+  },
   { files: CLOCKS, rules: { 'no-restricted-syntax': ['error', ...noSqlNow, ...noRawSql] } },
   {
     // Migrations and clones run whole files of SQL that stand in the repository.
