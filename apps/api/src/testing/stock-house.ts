@@ -14,41 +14,18 @@ import {
 } from '@wetside/db';
 import { and, eq, isNull } from 'drizzle-orm';
 import { v7 } from 'uuid';
-import { AlertsModule } from '../features/alerts/alerts.module.js';
-import type { EventView } from '../features/alerts/needs-you.dto.js';
-import { MixesModule } from '../features/mixes/mixes.module.js';
+import type { NeedsYouRowView, NeedsYouView } from '../features/alerts/needs-you.dto.js';
 import type { MixAnswer } from '../features/mixes/mix.dto.js';
 import type { OneOrderAnswer, OrderActionAnswer, OrdersAnswer } from '../features/orders/order.view.js';
-import { OrdersModule } from '../features/orders/orders.module.js';
 import type { ReceiptAnswer } from '../features/shelf/receipt.dto.js';
-import { ShelfModule } from '../features/shelf/shelf.module.js';
 import type { PackView, ShelfView } from '../features/shelf/shelf.view.js';
 import type { SuppliersAnswer } from '../features/suppliers/suppliers.dto.js';
-import { SuppliersModule } from '../features/suppliers/suppliers.module.js';
-import { VoidsModule } from '../features/voids/voids.module.js';
-import { HouseModule } from '../platform/house/house.module.js';
-import { JobsModule } from '../platform/jobs/jobs.module.js';
-import { MailModule } from '../platform/mail/mail.module.js';
 import type { ProblemDocument } from '../platform/errors/problem.js';
-import { TestApp, type Browser, type TestPerson } from './test-app.js';
-
-/** The program with everything that has to do with the shelf. */
-export const startWithShelf = (variables: Record<string, string> = {}): Promise<TestApp> =>
-  TestApp.start(variables, [
-    HouseModule,
-    JobsModule,
-    MailModule,
-    AlertsModule,
-    SuppliersModule,
-    OrdersModule,
-    ShelfModule,
-    MixesModule,
-    VoidsModule,
-  ]);
+import type { Browser, TestApp, TestPerson } from './test-app.js';
 
 interface Bodies {
   mix: MixAnswer;
-  'needs-you': { open: EventView[] };
+  'needs-you': NeedsYouView;
   order: OneOrderAnswer;
   'order-action': OrderActionAnswer;
   orders: OrdersAnswer;
@@ -145,6 +122,16 @@ export class StockHouse {
     );
   }
 
+  /** The reason for which that was refused. */
+  async refused(
+    answer: PromiseLike<{ status: number; body: unknown }>,
+    status: number,
+  ): Promise<ProblemDocument> {
+    const got = await answer;
+    expect(got.status).toBe(status);
+    return told('problem', got);
+  }
+
   void(voidedActionId: string, browser = this.technician) {
     return this.act(browser, 'voids', { voidedActionId, reason: 'wrong box' });
   }
@@ -176,7 +163,7 @@ export class StockHouse {
   }
 
   /** Open warnings about that pack. */
-  async warnings(packId: string): Promise<EventView[]> {
+  async warnings(packId: string): Promise<NeedsYouRowView[]> {
     const { open } = told('needs-you', await this.technician.get(this.url('needs-you')).expect(200));
     return open.filter(({ pack }) => pack?.id === packId);
   }

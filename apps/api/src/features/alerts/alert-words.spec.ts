@@ -100,7 +100,7 @@ describe('what a warning says', () => {
     });
     expect(pack(0, 2, 'none-on-shelf')).toMatchObject({
       sentence: 'Rapid fixer: none on the shelf',
-      advice: expect.stringContaining('on order'),
+      advice: expect.stringContaining('on order') as string,
     });
   });
 
@@ -133,7 +133,7 @@ describe('a warning as a mail', () => {
 
   it('says what, why, what to do and where, and keeps its subject on one line', () => {
     const { subject, context } = words(
-      [{ ...HOLD, reason: `smells\r\nBcc: x ${'y'.repeat(300)}` } as BottleFact],
+      [{ ...HOLD, reason: `smells\r\nBcc: x ${'y'.repeat(300)}` }],
       ['on-hold'],
       '2026-03-05',
     );

@@ -3,7 +3,7 @@ import { EventsRepository } from './events.repository.js';
 import { FactsRepository } from './facts.repository.js';
 import { NeedsYouController } from './needs-you.controller.js';
 import { NeedsYouService } from './needs-you.service.js';
-import { RecipientsRepository } from './recipients.repository.js';
+import { WarningMailsRepository } from './warning-mails.repository.js';
 import { SweepRepository } from './sweep.repository.js';
 import { SweepTimer } from './sweep-timer.js';
 import { Sweeper } from './sweeper.js';
@@ -17,7 +17,7 @@ import { WarningsService } from './warnings.service.js';
     WarningMails,
     FactsRepository,
     EventsRepository,
-    RecipientsRepository,
+    WarningMailsRepository,
     Sweeper,
     SweepRepository,
     SweepTimer,

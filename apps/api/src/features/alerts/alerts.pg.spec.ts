@@ -2,10 +2,7 @@ import { rapidFixer, stopBathSb5, type ChemistryDocument } from '@wetside/chemis
 import { events, mails, notices } from '@wetside/db';
 import { startMailCatcher, type MailCatcher } from '@wetside/mail-catcher';
 import { asc, eq } from 'drizzle-orm';
-import { HouseModule } from '../../platform/house/house.module.js';
-import { JobsModule } from '../../platform/jobs/jobs.module.js';
 import { touched, type Touched } from '../../platform/ledger/void-handlers.js';
-import { MailModule } from '../../platform/mail/mail.module.js';
 import { TestApp } from '../../testing/test-app.js';
 import type { Tx } from '../../platform/database/database.js';
 import {
@@ -17,7 +14,6 @@ import {
   type MadeBottle,
 } from '../../testing/bottle-factory.js';
 import { until } from '../../testing/until.js';
-import { AlertsModule } from './alerts.module.js';
 import type { Cause } from './crossing.js';
 import { Sweeper } from './sweeper.js';
 import { WarningsService } from './warnings.service.js';
@@ -40,7 +36,7 @@ describe('warnings', () => {
       MAIL_GRACE_S: String(graceS),
       SWEEP_S: '86400',
     };
-    test = await TestApp.start(variables, [HouseModule, JobsModule, MailModule, AlertsModule]);
+    test = await TestApp.start(variables);
     const ada = await test.person('Ada');
     darkroomId = await test.darkroom('cellar', ada);
     await test.join(darkroomId, await test.person('Tomas'), 'technician');
@@ -276,8 +272,8 @@ describe('warnings', () => {
     await hold(held, 'hold');
     await allIn('sent', 6);
     const browser = await test.signedIn({ personId: '', email: 'tomas@darkroom.example', name: 'Tomas' });
-    const { body } = await browser.get('/api/darkrooms/cellar/needs-you').expect(200);
-    expect(body.open).toMatchObject([
+    const answer = await browser.get('/api/darkrooms/cellar/needs-you').expect(200);
+    expect((answer.body as { open: unknown }).open).toMatchObject([
       {
         kind: 'on-hold',
         also: 'low',
@@ -286,7 +282,13 @@ describe('warnings', () => {
         bottle: { code: held.code },
         sentence: `${held.code} fixer is on hold by Ines: cloudy`,
       },
-      { kind: 'low', verb: 'mix', mailedTo: 2, crossing: 1, why: expect.stringContaining('Mailed to 2') },
+      {
+        kind: 'low',
+        verb: 'mix',
+        mailedTo: 2,
+        crossing: 1,
+        why: expect.stringContaining('Mailed to 2') as string,
+      },
     ]);
     const member = await test.signedIn({ personId: '', email: 'ines@darkroom.example', name: 'Ines' });
     await member.get('/api/darkrooms/cellar/needs-you').expect(403);

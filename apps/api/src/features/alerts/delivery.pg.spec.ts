@@ -6,20 +6,14 @@ import type { NestExpressApplication } from '@nestjs/platform-express';
 import { readEnvironment } from '../../config/environment.js';
 import { createApp, startUp } from '../../create-app.js';
 import { Clock } from '../../platform/clock/clock.js';
-import { HouseModule } from '../../platform/house/house.module.js';
-import { JobsModule } from '../../platform/jobs/jobs.module.js';
 import { touched } from '../../platform/ledger/void-handlers.js';
-import { MailModule } from '../../platform/mail/mail.module.js';
 import { OutgoingMail } from '../../platform/mail/outgoing-mail.service.js';
 import { SendMailTask } from '../../platform/mail/send-mail.task.js';
 import { ORIGIN, TestApp } from '../../testing/test-app.js';
 import { makeBottle, makeHold } from '../../testing/bottle-factory.js';
 import { until } from '../../testing/until.js';
-import { AlertsModule } from './alerts.module.js';
 import { Sweeper } from './sweeper.js';
 import { WarningsService } from './warnings.service.js';
-
-const MODULES = [HouseModule, JobsModule, MailModule, AlertsModule];
 
 describe('the delivery of mail', () => {
   let test: TestApp;
@@ -38,7 +32,7 @@ describe('the delivery of mail', () => {
     catcher = await startMailCatcher({ smtpPort: 0, httpPort: 0 });
     const smtp = { SMTP_URL: `smtp://127.0.0.1:${catcher.smtpPort}`, SWEEP_S: '86400' };
     given = { ...smtp, ...variables };
-    test = await TestApp.start(given, MODULES);
+    test = await TestApp.start(given);
     darkroomId = await test.darkroom('cellar', await test.person('Ada'));
     membershipId = await test.join(darkroomId, await test.person('Tomas'), 'technician');
   }
@@ -64,7 +58,7 @@ describe('the delivery of mail', () => {
       SESSION_SECRET: 'a secret that is only ever used in tests',
       ...given,
     });
-    second = await createApp(environment, MODULES);
+    second = await createApp(environment);
     await startUp(second);
   }
 
@@ -166,7 +160,7 @@ describe('the delivery of mail', () => {
     await holdBottles(1);
     await until(async () => (await rows()).every(({ state }) => state === 'failed'));
     expect(await rows()).toMatchObject(
-      Array(2).fill({ attempts: 12, lastAnswer: expect.stringContaining('451') }),
+      Array(2).fill({ attempts: 12, lastAnswer: expect.stringContaining('451') as string }),
     );
   });
 
@@ -205,7 +199,7 @@ describe('the delivery of mail', () => {
     expect(mail).toMatchObject({
       to: ['orders@supplier.example'],
       subject: 'Order 0007',
-      text: expect.stringContaining('Two concentrates.'),
+      text: expect.stringContaining('Two concentrates.') as string,
     });
     expect(mail?.headers['reply-to']).toContain('ada@darkroom.example');
   });

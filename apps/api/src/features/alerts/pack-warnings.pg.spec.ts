@@ -2,12 +2,8 @@ import { events, lots, mails, orderLines, orders, packs, supplierPacks, supplier
 import { and, asc, eq } from 'drizzle-orm';
 import { v7 } from 'uuid';
 import type { Tx } from '../../platform/database/database.js';
-import { HouseModule } from '../../platform/house/house.module.js';
-import { JobsModule } from '../../platform/jobs/jobs.module.js';
 import { touched } from '../../platform/ledger/void-handlers.js';
-import { MailModule } from '../../platform/mail/mail.module.js';
 import { TestApp } from '../../testing/test-app.js';
-import { AlertsModule } from './alerts.module.js';
 import type { Cause } from './crossing.js';
 import { WarningsService } from './warnings.service.js';
 
@@ -18,12 +14,7 @@ describe('warnings about the shelf', () => {
   const [lotA, lotB, supplierPackId] = [v7(), v7(), v7()];
 
   beforeAll(async () => {
-    test = await TestApp.start({ MAIL_GRACE_S: '3600', SWEEP_S: '86400' }, [
-      HouseModule,
-      JobsModule,
-      MailModule,
-      AlertsModule,
-    ]);
+    test = await TestApp.start({ MAIL_GRACE_S: '3600', SWEEP_S: '86400' });
   });
   afterAll(() => test.close());
 

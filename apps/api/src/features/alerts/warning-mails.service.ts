@@ -1,4 +1,6 @@
 import { Injectable } from '@nestjs/common';
+import { AddressesRepository, type Recipient } from '../../platform/auth/addresses.repository.js';
+import type { Role } from '../../platform/auth/roles.js';
 import { Environment } from '../../config/environment.js';
 import type { Tx } from '../../platform/database/database.js';
 import type { House } from '../../platform/house/house.repository.js';
@@ -7,7 +9,7 @@ import type { Day } from './alert-words.js';
 import type { Crossings } from './crossings.js';
 import { EventsRepository } from './events.repository.js';
 import { planMails, type MailPlan, type NewNotice } from './mail-plan.js';
-import { RecipientsRepository, type Recipient } from './recipients.repository.js';
+import { WarningMailsRepository } from './warning-mails.repository.js';
 import { warningMail } from './warning-mail.js';
 
 /** In which darkroom, and when. */
@@ -19,13 +21,17 @@ export interface MailScene {
 
 type Planned = { plan: MailPlan; words: { subject: string; body: string } };
 
+/** Who gets warnings. */
+const TOLD: readonly Role[] = ['technician', 'manager'];
+
 /** Brings the mails in line with the events that opened and ended. */
 @Injectable()
 export class WarningMails {
   constructor(
     private readonly environment: Environment,
     private readonly events: EventsRepository,
-    private readonly recipients: RecipientsRepository,
+    private readonly repository: WarningMailsRepository,
+    private readonly addresses: AddressesRepository,
     private readonly outgoing: OutgoingMail,
   ) {}
 
@@ -48,7 +54,7 @@ export class WarningMails {
       planned.filter(({ plan }) => plan.tellAll),
       dueAt,
     );
-    await this.recipients.note(tx, darkroomId, [...planned.flatMap(({ plan }) => plan.add), ...notices]);
+    await this.repository.note(tx, darkroomId, [...planned.flatMap(({ plan }) => plan.add), ...notices]);
     return woken.length + notices.length > 0 ? dueAt : null;
   }
 
@@ -75,10 +81,10 @@ export class WarningMails {
   private async change(tx: Tx, darkroomId: string, { plan, words }: Planned, dueAt: Date): Promise<void> {
     for (const because of new Set(plan.withdraw.map((one) => one.because))) {
       const ids = plan.withdraw.filter((one) => one.because === because).map(({ mailId }) => mailId);
-      await this.recipients.withdraw(tx, darkroomId, ids, because);
+      await this.repository.withdraw(tx, darkroomId, ids, because);
     }
-    await this.recipients.reword(tx, darkroomId, plan.reword, words);
-    await this.recipients.wake(tx, darkroomId, plan.wake, { ...words, dueAt });
+    await this.repository.reword(tx, darkroomId, plan.reword, words);
+    await this.repository.wake(tx, darkroomId, plan.wake, { ...words, dueAt });
   }
 
   /** One mail a person and subject, all of them in one go. */
@@ -89,7 +95,7 @@ export class WarningMails {
     dueAt: Date,
   ): Promise<NewNotice[]> {
     if (planned.length === 0) return [];
-    const people = await this.recipients.all(tx, darkroomId);
+    const people = await this.addresses.withRoles(tx, darkroomId, TOLD);
     const letters = planned.flatMap((one) =>
       people.map((person) => ({ one, person, mail: letter(darkroomId, one, person, dueAt) })),
     );

@@ -7,7 +7,6 @@ import {
   orderLines,
   orders,
   packs,
-  people,
   supplierPacks,
   suppliers,
 } from '@wetside/db';
@@ -195,15 +194,5 @@ export class OrdersRepository {
         ),
       )
       .groupBy(supplierPacks.packId);
-  }
-
-  /** Where mail reaches the member; null once the account is gone. */
-  async addressOf(tx: Tx, darkroomId: string, membershipId: string): Promise<string | null> {
-    const [row] = await tx
-      .select({ email: people.email })
-      .from(memberships)
-      .innerJoin(people, eq(people.id, memberships.personId))
-      .where(and(eq(memberships.darkroomId, darkroomId), eq(memberships.id, membershipId)));
-    return row?.email ?? null;
   }
 }

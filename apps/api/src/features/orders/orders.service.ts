@@ -1,3 +1,4 @@
+import { AddressesRepository } from '../../platform/auth/addresses.repository.js';
 import { Injectable } from '@nestjs/common';
 import type { Me } from '../../platform/auth/me.js';
 import type { Tx } from '../../platform/database/database.js';
@@ -10,6 +11,7 @@ import { OrdersRepository } from './orders.repository.js';
 @Injectable()
 export class OrdersService {
   constructor(
+    private readonly addresses: AddressesRepository,
     private readonly repository: OrdersRepository,
     private readonly views: OrderViews,
   ) {}
@@ -38,7 +40,7 @@ export class OrdersService {
 
   private async mailText(tx: Tx, me: Me, whole: WholeOrder): Promise<string | null> {
     if (whole.detail.order.state !== 'draft') return whole.mail?.body ?? null;
-    const address = await this.repository.addressOf(tx, me.darkroomId, me.membershipId);
+    const address = await this.addresses.ofMember(tx, me.darkroomId, me.membershipId);
     return orderMail(toMailOrder(whole, me.darkroomName, { name: me.displayName, address })).body;
   }
 }

@@ -1,3 +1,4 @@
+import { AddressesRepository } from '../../platform/auth/addresses.repository.js';
 import { Injectable, type OnModuleInit } from '@nestjs/common';
 import type { Tx } from '../../platform/database/database.js';
 import { problem } from '../../platform/errors/problem.js';
@@ -25,6 +26,7 @@ export class SendingService implements OnModuleInit {
   constructor(
     private readonly recorder: ActionRecorder,
     private readonly actionViews: ActionViews,
+    private readonly addresses: AddressesRepository,
     private readonly repository: OrdersRepository,
     private readonly views: OrderViews,
     private readonly packs: PackLocks,
@@ -143,7 +145,7 @@ export class SendingService implements OnModuleInit {
     write: (order: ReturnType<typeof toMailOrder>) => MailText,
   ): Promise<void> {
     const { id } = whole.detail.order;
-    const address = await this.repository.addressOf(tx, darkroomId, me.membershipId);
+    const address = await this.addresses.ofMember(tx, darkroomId, me.membershipId);
     const { subject, body } = write(toMailOrder(whole, me.darkroomName, { name: me.displayName, address }));
     await this.outgoing.post(tx, {
       darkroomId,

@@ -1,13 +1,13 @@
 import { v7 } from 'uuid';
-import type { TestApp } from '../../testing/test-app.js';
-import { startWithShelf, StockHouse, told } from '../../testing/stock-house.js';
+import { TestApp } from '../../testing/test-app.js';
+import { StockHouse, told } from '../../testing/stock-house.js';
 
 let t: TestApp;
 let house: StockHouse;
 let houses = 0;
 
 beforeAll(async () => {
-  t = await startWithShelf();
+  t = await TestApp.start();
 });
 afterAll(() => t.close());
 beforeEach(async () => {
@@ -15,9 +15,10 @@ beforeEach(async () => {
   house = await StockHouse.open(t, `yard-${houses}`);
 });
 
+const suppliers = async () =>
+  told('suppliers', await house.technician.get(house.url('suppliers')).expect(200)).suppliers;
 const outUntil = async () => {
-  const { body } = await house.technician.get(house.url('suppliers')).expect(200);
-  const packs: { supplierPackId: string; outUntil: string | null }[] = body.suppliers[0].packs;
+  const packs = (await suppliers()).flatMap((supplier) => supplier.packs);
   return packs.find((pack) => pack.supplierPackId === house.soldKit)?.outUntil;
 };
 
@@ -30,8 +31,7 @@ const change = (value: string | null, actionId = v7(), browser = house.technicia
   );
 
 it('lists the suppliers with what they sell', async () => {
-  const { body } = await house.technician.get(house.url('suppliers')).expect(200);
-  expect(body.suppliers).toMatchObject([
+  expect(await suppliers()).toMatchObject([
     {
       name: 'Bromide Street Supplies',
       currency: 'EUR',
@@ -45,16 +45,16 @@ it('says until when a pack is sold out, and sets it back', async () => {
   await change('2027-01-12', first).expect(201);
   expect(await outUntil()).toBe('2027-01-12');
   await change('2027-02-01', second).expect(201);
-  expect((await house.void(first).expect(409)).body.code).toBe('leans-on-it');
+  expect((await house.refused(house.void(first), 409)).code).toBe('leans-on-it');
   await house.void(second).expect(201);
   expect(await outUntil()).toBe('2027-01-12');
   await house.void(first).expect(201);
   expect(await outUntil()).toBeNull();
-  expect((await house.void(first).expect(409)).body.code).toBe('already-voided');
+  expect((await house.refused(house.void(first), 409)).code).toBe('already-voided');
 });
 
 it('takes a date of the calendar from a technician of this darkroom', async () => {
-  expect((await change('2027-02-30').expect(400)).body.errors[0].field).toBe('content.changes.0.value');
+  expect((await house.refused(change('2027-02-30'), 400)).errors?.[0]?.field).toBe('content.changes.0.value');
   const other = await StockHouse.open(t, `shed-${houses}`);
   await change('2027-01-12', v7(), other.technician).expect(404);
   await change('2027-01-12', v7(), await house.member(`Mo ${houses}`)).expect(403);

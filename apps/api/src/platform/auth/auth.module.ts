@@ -1,6 +1,7 @@
 import { Global, Module } from '@nestjs/common';
 import { APP_GUARD, APP_INTERCEPTOR, DiscoveryModule } from '@nestjs/core';
 import { Accounts } from './accounts.js';
+import { AddressesRepository } from './addresses.repository.js';
 import { AuthGuard } from './auth.guard.js';
 import { Cookies } from './cookies.js';
 import { CrossSiteGuard } from './cross-site.guard.js';
@@ -20,6 +21,7 @@ import { Tokens } from './tokens.js';
     Tokens,
     Passphrases,
     Accounts,
+    AddressesRepository,
     Throttle,
     SessionsRepository,
     Sessions,
@@ -29,6 +31,6 @@ import { Tokens } from './tokens.js';
     { provide: APP_GUARD, useClass: AuthGuard },
     { provide: APP_INTERCEPTOR, useClass: EnteredInterceptor },
   ],
-  exports: [Accounts, Cookies, Tokens, Passphrases, Throttle, SessionsRepository, Sessions, DarkroomAccess],
+  exports: [Accounts, AddressesRepository, Cookies, Tokens, Passphrases, Throttle, SessionsRepository, Sessions, DarkroomAccess],
 })
 export class AuthModule {}

@@ -1,39 +1,14 @@
 import { Injectable } from '@nestjs/common';
-import { mails, memberships, notices, people } from '@wetside/db';
-import { and, asc, eq, inArray, isNotNull, isNull } from 'drizzle-orm';
+import { mails, notices } from '@wetside/db';
+import { and, eq, inArray } from 'drizzle-orm';
 import type { Tx } from '../../platform/database/database.js';
 import type { NewNotice } from './mail-plan.js';
-
-export interface Recipient {
-  membershipId: string;
-  address: string;
-}
 
 const isWaiting = (darkroomId: string, ids: readonly string[]) =>
   and(eq(mails.darkroomId, darkroomId), inArray(mails.id, [...ids]), eq(mails.state, 'waiting'));
 
 @Injectable()
-export class RecipientsRepository {
-  /** Who gets warnings: technicians and managers who have not left. */
-  async all(tx: Tx, darkroomId: string): Promise<Recipient[]> {
-    const rows = await tx
-      .select({ membershipId: memberships.id, address: people.email })
-      .from(memberships)
-      .innerJoin(
-        people,
-        and(eq(people.id, memberships.personId), isNull(people.deletedAt), isNotNull(people.email)),
-      )
-      .where(
-        and(
-          eq(memberships.darkroomId, darkroomId),
-          isNull(memberships.leftAt),
-          inArray(memberships.role, ['technician', 'manager']),
-        ),
-      )
-      .orderBy(asc(memberships.id));
-    return rows.flatMap(({ membershipId, address }) => (address === null ? [] : [{ membershipId, address }]));
-  }
-
+export class WarningMailsRepository {
   async note(tx: Tx, darkroomId: string, list: readonly NewNotice[]): Promise<void> {
     if (list.length === 0) return;
     await tx
