@@ -1,7 +1,7 @@
+import { chargeFor } from '../charge.js';
 import type { Container } from '../container.js';
 import { localDate } from '../dates.js';
 import type { ChemistryDocument } from '../document.js';
-import { chargeFor } from '../charge.js';
 import { type FilmClass, namedFormats, type NamedFormat } from '../film.js';
 import type { BottleFact, FactBase } from '../ledger.js';
 import { drawFrom, type Known, mayBefall, starterDocument } from './program-rules.js';

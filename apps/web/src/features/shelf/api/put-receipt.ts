@@ -1,0 +1,11 @@
+import { useAction } from '../../../shared/actions/use-action.js';
+import { keptKey } from '../../../shared/api/query-keys.js';
+import type { ReceiptAnswer, ReceiptContent } from '../../../shared/api/types.js';
+
+/** Puts what came onto the shelf, from an order or by hand. A technician's. */
+export const usePutReceipt = () =>
+  useAction<ReceiptContent, ReceiptAnswer>({
+    plural: 'receipts',
+    settle: (client, darkroom, { shelf }) => client.setQueryData(keptKey(darkroom, 'shelf'), shelf),
+    touches: ['shelf', 'orders', 'order', 'needs-you', 'log', 'chemistries'],
+  });

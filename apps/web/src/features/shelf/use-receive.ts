@@ -1,0 +1,49 @@
+import { useState } from 'react';
+import type { UseFormReturn } from 'react-hook-form';
+import { newId } from '../../shared/actions/send-action.js';
+import { showStrip } from '../../shared/actions/strip.store.js';
+import { ProblemError } from '../../shared/api/problem.js';
+import type { ReceiptAnswer } from '../../shared/api/types.js';
+import { countOf } from '../../shared/formats/amounts.js';
+import { showProblem } from '../../shared/ui/form-problem.js';
+import { usePutReceipt } from './api/put-receipt.js';
+import { fieldOfReceipt, type ReceiptForm, receiptLines } from './receipt-form.js';
+
+/** Sends what came, once, and puts the server's objections into the form. */
+export function useReceive(form: UseFormReturn<ReceiptForm>, orderId: string | null) {
+  const receipt = usePutReceipt();
+  const [actionId, setActionId] = useState(newId);
+  const [moreThanOrdered, setMoreThanOrdered] = useState(false);
+
+  const receive = async (filled: ReceiptForm): Promise<ReceiptAnswer | null> => {
+    const lines = receiptLines(filled.rows);
+    if (lines.length === 0) {
+      form.setError('root', { message: 'Say of one pack at least how many came.' });
+      return null;
+    }
+    const content = {
+      ...(orderId && { orderId }),
+      lines,
+      ...(filled.note.trim() && { note: filled.note.trim() }),
+      ...(filled.overDeliveryOk && { overDeliveryOk: true }),
+    };
+    try {
+      const answer = await receipt.sendAndWait(actionId, content);
+      const packs = lines.reduce((sum, line) => sum + line.count, 0);
+      const verb = packs === 1 ? 'is' : 'are';
+      showStrip({
+        actionId,
+        state: 'done',
+        words: `${countOf(packs, 'pack')} ${verb} on the shelf.`,
+        canUndo: true,
+      });
+      setActionId(newId());
+      return answer;
+    } catch (error) {
+      if (error instanceof ProblemError && error.code === 'more-than-ordered') setMoreThanOrdered(true);
+      showProblem(error, form.setError, (field) => fieldOfReceipt(field, filled.rows));
+      return null;
+    }
+  };
+  return { receive, moreThanOrdered, isPending: receipt.isPending };
+}

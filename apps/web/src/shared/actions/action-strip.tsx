@@ -1,0 +1,47 @@
+import { Box, Button, Flex } from '@chakra-ui/react';
+import { useStore } from '../store.js';
+import { clearStrip, type Strip, strip as stripStore } from './strip.store.js';
+import { useUndo } from './use-undo.js';
+
+const wordsFor = ({ state, words }: Strip): string =>
+  state === 'unsent' ? `No signal. Not sent yet: ${words}` : words;
+
+/** What was just done, said once to a screen reader, and the way back. */
+export function ActionStrip() {
+  const strip = useStore(stripStore);
+  const undo = useUndo();
+  return (
+    <Box role="status" aria-label="What was just done">
+      {strip && (
+        <Flex
+          align="center"
+          gap="3"
+          wrap="wrap"
+          px="4"
+          py="2"
+          mb="4"
+          bg="surface"
+          borderBottomWidth="1px"
+          borderColor="rule"
+        >
+          <Box flex="1 1 8rem" color={strip.state === 'refused' ? 'state.stop' : 'ink'}>
+            {wordsFor(strip)}
+          </Box>
+          {strip.state === 'unsent' && strip.again && (
+            <Button variant="outline" minH="11" onClick={strip.again}>
+              Try again
+            </Button>
+          )}
+          {strip.canUndo && (
+            <Button variant="outline" minH="11" onClick={() => undo(strip)}>
+              Undo
+            </Button>
+          )}
+          <Button variant="plain" minH="11" px="2" onClick={clearStrip}>
+            Close
+          </Button>
+        </Flex>
+      )}
+    </Box>
+  );
+}

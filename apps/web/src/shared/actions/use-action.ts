@@ -1,0 +1,110 @@
+import { type QueryClient, useMutation, useQueryClient } from '@tanstack/react-query';
+import { useRef } from 'react';
+import { isUncertain, wordsOf } from '../api/problem.js';
+import { keptKey, type Kept } from '../api/query-keys.js';
+import type { ActionAnswer } from '../api/types.js';
+import { useDarkroom } from '../darkroom/darkroom-context.js';
+import { addPending, type BottleChange, type PendingAction, removePending } from './pending.store.js';
+import { sendAction, tell, type Told } from './send-action.js';
+import { showStrip, updateStrip } from './strip.store.js';
+import { rememberBefore } from './undo-memory.js';
+
+/** What every action of the program says about itself; the recipe below does the rest. */
+export interface ActionRecipe<Content, Answer extends ActionAnswer> {
+  /** The word in its address: 'loads'. */
+  plural: string;
+  /** What it does to bottles, shown before the server has answered. */
+  changes?(content: Content): BottleChange[];
+  restores?(content: Content): PendingAction['restores'];
+  /** Puts the server's answer in the place of what was shown. */
+  settle?(client: QueryClient, darkroom: string, answer: Answer): void;
+  /** What is fetched again afterwards. */
+  touches: readonly Kept[];
+}
+
+export interface SendOptions {
+  /** The sentence of the strip, shown at once. Without it the caller speaks for itself. */
+  words?: string;
+  canUndo?: boolean;
+  undone?: string;
+}
+
+interface Sending<Content> {
+  told: Told<Content>;
+  content: Content;
+  options: SendOptions;
+}
+
+const TRIES_AGAIN = 4;
+const waitMs = (failures: number): number => Math.min(400 * 2 ** failures, 6_000);
+
+/**
+ * The one recipe for doing something: the change shows at once, goes out under an id made beforehand, is sent
+ * again under the same id while nobody knows whether it arrived, gives way to the server's answer, and is
+ * taken back with the server's sentence when that says no. Actions of a darkroom go out one after another.
+ */
+export function useAction<Content extends object, Answer extends ActionAnswer>(
+  recipe: ActionRecipe<Content, Answer>,
+) {
+  const client = useQueryClient();
+  const { address: darkroom } = useDarkroom();
+
+  const mutation = useMutation<Answer, Error, Sending<Content>>({
+    mutationKey: ['action', darkroom, recipe.plural],
+    scope: { id: `actions of ${darkroom}` },
+    mutationFn: ({ told }) => sendAction<Answer>(darkroom, recipe.plural, told),
+    retry: (failures, error) => isUncertain(error) && failures < TRIES_AGAIN,
+    retryDelay: waitMs,
+    onMutate: ({ told, content, options }) => {
+      const changes = recipe.changes?.(content) ?? [];
+      const restores = recipe.restores?.(content);
+      rememberBefore(client, darkroom, told.actionId, changes);
+      addPending({ actionId: told.actionId, darkroom, changes, ...(restores && { restores }) });
+      if (options.words) {
+        showStrip({
+          actionId: told.actionId,
+          state: 'sending',
+          words: options.words,
+          canUndo: options.canUndo ?? true,
+          undone: options.undone,
+        });
+      }
+    },
+    onSuccess: (answer, { told }) => {
+      recipe.settle?.(client, darkroom, answer);
+      removePending(told.actionId);
+      updateStrip(told.actionId, { state: 'done' });
+      for (const kept of recipe.touches) void client.invalidateQueries({ queryKey: keptKey(darkroom, kept) });
+    },
+    onError: (error, sending) => {
+      const { actionId } = sending.told;
+      if (isUncertain(error)) {
+        // It may have arrived: what is shown stays, and the same id is the only safe way to ask again.
+        const again = (): void => mutation.mutate(sending);
+        updateStrip(actionId, { state: 'unsent', again });
+        return;
+      }
+      removePending(actionId);
+      updateStrip(actionId, { state: 'refused', words: wordsOf(error), canUndo: false });
+    },
+  });
+
+  const last = useRef<Sending<Content> | null>(null);
+  const prepare = (actionId: string, content: Content, options: SendOptions): Sending<Content> => {
+    const before = last.current;
+    // Pressed again after a try that nobody answered: the same words at the same time, not a later one.
+    const same =
+      before?.told.actionId === actionId && JSON.stringify(before.content) === JSON.stringify(content);
+    last.current = same ? before : { told: tell(actionId, content), content, options };
+    return last.current;
+  };
+  return {
+    /** Sends it and lets the strip speak. */
+    send: (actionId: string, content: Content, options: SendOptions): void =>
+      mutation.mutate(prepare(actionId, content, options)),
+    /** Sends it for a form that waits for the answer. Rejects with ProblemError or NetworkError. */
+    sendAndWait: (actionId: string, content: Content): Promise<Answer> =>
+      mutation.mutateAsync(prepare(actionId, content, {})),
+    isPending: mutation.isPending,
+  };
+}

@@ -1,0 +1,50 @@
+import { Box, chakra, Stack } from '@chakra-ui/react';
+import { type ComponentProps, useId } from 'react';
+
+interface Props extends Pick<ComponentProps<'input'>, 'name' | 'ref' | 'onChange' | 'onBlur'> {
+  legend: string;
+  options: readonly { value: string; label: string; note?: string }[];
+  error?: string | undefined;
+}
+
+const Row = chakra('label', {
+  base: { display: 'flex', gap: '3', alignItems: 'center', minH: '11', py: '2', cursor: 'pointer' },
+});
+
+/** One of several, a line each with its own note. Takes what a form's register gives. */
+export function RadioRows({ legend, options, error, ...field }: Props) {
+  const errorId = useId();
+  return (
+    <chakra.fieldset minW="0" aria-describedby={error ? errorId : undefined}>
+      <chakra.legend fontWeight="600">{legend}</chakra.legend>
+      <Stack gap="0">
+        {options.map((option) => (
+          <Row key={option.value}>
+            <chakra.input
+              type="radio"
+              w="5"
+              h="5"
+              flex="none"
+              accentColor="{colors.brand}"
+              value={option.value}
+              {...field}
+            />
+            <span>
+              {option.label}{' '}
+              {option.note && (
+                <Box as="span" color="ink.muted">
+                  {option.note}
+                </Box>
+              )}
+            </span>
+          </Row>
+        ))}
+      </Stack>
+      {error && (
+        <Box id={errorId} color="state.stop" fontSize="small">
+          {error}
+        </Box>
+      )}
+    </chakra.fieldset>
+  );
+}
