@@ -464,15 +464,48 @@ export interface components {
             email: string;
             passphrase: string;
         };
+        PersonView: {
+            /** Format: uuid */
+            id: string;
+            name: string;
+        };
+        OwnDarkroomView: {
+            /** Format: uuid */
+            id: string;
+            shortName: string;
+            name: string;
+            /** @enum {string} */
+            role: "member" | "technician" | "manager";
+        };
         SignedInView: {
-            person: components["schemas"];
-            darkrooms: components["schemas"][];
+            person: components["schemas"]["PersonView"];
+            darkrooms: components["schemas"]["OwnDarkroomView"][];
         };
         MeView: {
-            person: components["schemas"];
-            darkrooms: components["schemas"][];
+            person: components["schemas"]["PersonView"];
+            darkrooms: components["schemas"]["OwnDarkroomView"][];
             /** Format: date-time */
             now: string;
+        };
+        UnitsView: {
+            /** @enum {string} */
+            temperature: "C" | "F";
+            /** @enum {string} */
+            volume: "mL" | "fl oz";
+        };
+        ThresholdsView: {
+            lowShareE4: number;
+            lowRollsE4: number;
+            nearDaysMax: number;
+            nearShareE4: number;
+            smallestTankUl: number | null;
+        };
+        OwnMembershipView: {
+            /** Format: uuid */
+            membershipId: string;
+            /** @enum {string} */
+            role: "member" | "technician" | "manager";
+            displayName: string;
         };
         DarkroomView: {
             /** Format: uuid */
@@ -480,10 +513,10 @@ export interface components {
             shortName: string;
             name: string;
             zone: string;
-            units: components["schemas"];
+            units: components["schemas"]["UnitsView"];
             currency: string;
-            thresholds: components["schemas"];
-            me: components["schemas"];
+            thresholds: components["schemas"]["ThresholdsView"];
+            me: components["schemas"]["OwnMembershipView"];
         };
         MembershipView: {
             /** Format: uuid */
@@ -683,9 +716,39 @@ export interface components {
             /** Format: date */
             today: string;
         };
+        ReceiptLineDto: {
+            /** Format: uuid */
+            packId: string;
+            /** Format: uuid */
+            orderLineId?: string;
+            /** Format: uuid */
+            lotId: string;
+            lotNumber: string;
+            /** Format: date */
+            expiresOn: string | null;
+            count: number;
+            priceMinor?: number | null;
+        };
+        ReceiptContent: {
+            v: number;
+            /** Format: date-time */
+            happenedAt: string;
+            /** Format: uuid */
+            orderId?: string;
+            lines: components["schemas"]["ReceiptLineDto"][];
+            note?: string;
+            overDeliveryOk?: boolean;
+        };
+        EnvelopeDto: {
+            /** Format: date-time */
+            sentAt: string;
+            /** Format: date-time */
+            deviceNow: string;
+            queued: boolean;
+        };
         PutReceipt: {
-            content: components["schemas"];
-            envelope: components["schemas"];
+            content: components["schemas"]["ReceiptContent"];
+            envelope: components["schemas"]["EnvelopeDto"];
         };
         OrderSupplierView: {
             /** Format: uuid */
@@ -744,9 +807,40 @@ export interface components {
             shelf: components["schemas"]["ShelfView"];
             order?: components["schemas"]["OrderView"];
         };
+        ContainerDto: {
+            sizeUl: number;
+            /** @enum {string} */
+            kind: "bottle" | "floating-lid" | "tray" | "tank";
+            /** @enum {string} */
+            material?: "glass" | "pet" | "soft-polyethylene" | "concertina";
+        };
+        MixFromDto: {
+            /** @enum {string} */
+            kind: "lot" | "opened" | "stock" | "hand";
+            /** Format: uuid */
+            lotId?: string;
+            openedPackIds?: string[];
+            /** Format: uuid */
+            bottleId?: string;
+        };
+        MixContentDto: {
+            v: number;
+            /** Format: date-time */
+            happenedAt: string;
+            /** Format: uuid */
+            bottleId: string;
+            /** Format: uuid */
+            chemistryVersionId: string;
+            volumeUl: number;
+            container: components["schemas"]["ContainerDto"];
+            /** @enum {string|null} */
+            material: "film" | "rc-paper" | "fb-paper" | null;
+            from: components["schemas"]["MixFromDto"];
+            note?: string;
+        };
         PutMixDto: {
-            content: components["schemas"];
-            envelope: components["schemas"];
+            content: components["schemas"]["MixContentDto"];
+            envelope: components["schemas"]["EnvelopeDto"];
         };
         MixAnswer: {
             action: components["schemas"]["ActionView"];
@@ -755,9 +849,43 @@ export interface components {
                 [key: string]: unknown;
             };
         };
+        GuestDto: {
+            /** Format: uuid */
+            id: string;
+            name: string;
+            reach: string;
+        };
+        OwnerDto: {
+            /** Format: uuid */
+            membershipId?: string;
+            guest?: components["schemas"]["GuestDto"];
+        };
+        FilmDto: {
+            /** @enum {string} */
+            format: "135-36" | "135-24" | "120" | "220" | "4x5" | "5x7" | "8x10" | "11x14" | "sheet";
+            widthMm?: number;
+            heightMm?: number;
+            count: number;
+            /** @enum {string} */
+            filmClass: "conventional" | "tabular-grain" | "ortho" | "lith" | "chromogenic" | "colour-negative" | "colour-reversal" | "rem-jet" | "infrared" | "not-sure";
+            owner?: components["schemas"]["OwnerDto"];
+        };
+        LoadContentDto: {
+            v: number;
+            /** Format: date-time */
+            happenedAt: string;
+            bottleIds: string[];
+            /** @enum {string} */
+            material: "film" | "rc-paper" | "fb-paper";
+            film: components["schemas"]["FilmDto"][];
+            /** Format: uuid */
+            lineVersionId?: string | null;
+            reported?: boolean;
+            note?: string;
+        };
         PutLoadDto: {
-            content: components["schemas"];
-            envelope: components["schemas"];
+            content: components["schemas"]["LoadContentDto"];
+            envelope: components["schemas"]["EnvelopeDto"];
         };
         LoadFilmView: {
             format: string;
@@ -790,9 +918,19 @@ export interface components {
             load: components["schemas"]["LoadView"];
             bottles: components["schemas"]["BottleView"][];
         };
+        DecisionContentDto: {
+            v: number;
+            /** Format: date-time */
+            happenedAt: string;
+            /** Format: uuid */
+            loadActionId: string;
+            /** @enum {string} */
+            decision: "accept";
+            reason: string;
+        };
         PutDecisionDto: {
-            content: components["schemas"];
-            envelope: components["schemas"];
+            content: components["schemas"]["DecisionContentDto"];
+            envelope: components["schemas"]["EnvelopeDto"];
         };
         ActionAnswer: {
             action: components["schemas"]["ActionView"];
@@ -801,17 +939,43 @@ export interface components {
             action: components["schemas"]["ActionView"];
             bottle: components["schemas"]["BottleView"];
         };
+        HoldContentDto: {
+            v: number;
+            /** Format: date-time */
+            happenedAt: string;
+            /** Format: uuid */
+            bottleId: string;
+            reason: string;
+        };
         PutHoldDto: {
-            content: components["schemas"];
-            envelope: components["schemas"];
+            content: components["schemas"]["HoldContentDto"];
+            envelope: components["schemas"]["EnvelopeDto"];
+        };
+        DiscardContentDto: {
+            v: number;
+            /** Format: date-time */
+            happenedAt: string;
+            /** Format: uuid */
+            bottleId: string;
+            /** @enum {string} */
+            wasteRoute: "fixer-silver" | "bleach-fix-silver-iron" | "developer" | "stop-and-acids" | "carrier-only" | "other" | "unknown";
+            note?: string;
         };
         PutDiscardDto: {
-            content: components["schemas"];
-            envelope: components["schemas"];
+            content: components["schemas"]["DiscardContentDto"];
+            envelope: components["schemas"]["EnvelopeDto"];
+        };
+        VoidContentDto: {
+            v: number;
+            /** Format: date-time */
+            happenedAt: string;
+            /** Format: uuid */
+            voidedActionId: string;
+            reason?: string;
         };
         PutVoidDto: {
-            content: components["schemas"];
-            envelope: components["schemas"];
+            content: components["schemas"]["VoidContentDto"];
+            envelope: components["schemas"]["EnvelopeDto"];
         };
         VoidAnswer: {
             action: components["schemas"]["ActionView"];
@@ -844,9 +1008,25 @@ export interface components {
         SuppliersAnswer: {
             suppliers: components["schemas"]["SupplierView"][];
         };
+        SettingDto: {
+            /** @enum {string} */
+            field: "outUntil";
+            /** Format: date */
+            value: string | null;
+        };
+        SettingChangeContent: {
+            v: number;
+            /** Format: date-time */
+            happenedAt: string;
+            /** @enum {string} */
+            subject: "supplier-pack";
+            /** Format: uuid */
+            subjectId: string;
+            changes: components["schemas"]["SettingDto"][];
+        };
         PutSettingChange: {
-            content: components["schemas"];
-            envelope: components["schemas"];
+            content: components["schemas"]["SettingChangeContent"];
+            envelope: components["schemas"]["EnvelopeDto"];
         };
         SettingChangeAnswer: {
             action: components["schemas"]["ActionView"];
@@ -859,32 +1039,108 @@ export interface components {
             /** @description As it went out; of a draft, as you would send it. */
             mailText: string | null;
         };
+        ChangedLineDto: {
+            /** Format: uuid */
+            id: string;
+            /** Format: uuid */
+            supplierPackId: string;
+            count: number;
+        };
         ChangeOrder: {
             revision: number;
             note?: string | null;
-            lines: components["schemas"][];
+            lines: components["schemas"]["ChangedLineDto"][];
         };
         OrderAnswer: {
             order: components["schemas"]["OrderView"];
         };
+        DraftLineDto: {
+            /** Format: uuid */
+            id: string;
+            /** Format: uuid */
+            supplierPackId: string;
+            count: number;
+        };
+        OrderDraftContent: {
+            v: number;
+            /** Format: date-time */
+            happenedAt: string;
+            /** Format: uuid */
+            orderId: string;
+            /** Format: uuid */
+            supplierId: string;
+            lines: components["schemas"]["DraftLineDto"][];
+        };
         PutOrderDraft: {
-            content: components["schemas"];
-            envelope: components["schemas"];
+            content: components["schemas"]["OrderDraftContent"];
+            envelope: components["schemas"]["EnvelopeDto"];
         };
         OrderActionAnswer: {
             order: components["schemas"]["OrderView"];
             action: components["schemas"]["ActionView"];
         };
+        OrderSendingContent: {
+            v: number;
+            /** Format: date-time */
+            happenedAt: string;
+            /** Format: uuid */
+            orderId: string;
+            revision: number;
+        };
         PutOrderSending: {
-            content: components["schemas"];
-            envelope: components["schemas"];
+            content: components["schemas"]["OrderSendingContent"];
+            envelope: components["schemas"]["EnvelopeDto"];
+        };
+        OrderCancellationContent: {
+            v: number;
+            /** Format: date-time */
+            happenedAt: string;
+            /** Format: uuid */
+            orderId: string;
+            reason: string;
         };
         PutOrderCancellation: {
-            content: components["schemas"];
-            envelope: components["schemas"];
+            content: components["schemas"]["OrderCancellationContent"];
+            envelope: components["schemas"]["EnvelopeDto"];
+        };
+        NeedsYouBottleView: {
+            /** Format: uuid */
+            id: string;
+            code: string;
+            name: string;
+        };
+        NeedsYouPackView: {
+            /** Format: uuid */
+            id: string;
+            name: string;
+        };
+        NeedsYouLoadView: {
+            /** Format: uuid */
+            actionId: string;
+            by: string;
+            sentence: string;
+        };
+        NeedsYouRowView: {
+            /** Format: uuid */
+            eventId: string;
+            /** @enum {string} */
+            kind: "low" | "near-date" | "spent" | "past-date" | "on-hold" | "load-to-decide" | "kit-near-expiry" | "kit-past-expiry" | "reorder-point" | "none-on-shelf" | "test-due";
+            /** @enum {string} */
+            also?: "low" | "near-date" | "spent" | "past-date" | "on-hold" | "load-to-decide" | "kit-near-expiry" | "kit-past-expiry" | "reorder-point" | "none-on-shelf" | "test-due";
+            /** Format: date-time */
+            openedAt: string;
+            crossing: number;
+            sentence: string;
+            why: string;
+            mailedTo: number;
+            bottle?: components["schemas"]["NeedsYouBottleView"];
+            pack?: components["schemas"]["NeedsYouPackView"];
+            load?: components["schemas"]["NeedsYouLoadView"];
+            /** @enum {string} */
+            verb: "discard" | "mix" | "release" | "order" | "decide" | "look";
         };
         NeedsYouView: {
-            open: components["schemas"][];
+            open: components["schemas"]["NeedsYouRowView"][];
         };
         LogAnswer: {
             entries: components["schemas"]["LogEntryView"][];

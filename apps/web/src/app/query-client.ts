@@ -1,4 +1,4 @@
-import { QueryCache, QueryClient } from '@tanstack/react-query';
+import { MutationCache, QueryCache, QueryClient } from '@tanstack/react-query';
 import { NetworkError, ProblemError } from '../shared/api/problem.js';
 import { meKey } from '../shared/api/query-keys.js';
 
@@ -6,12 +6,12 @@ const isSignedOut = (error: Error): boolean => error instanceof ProblemError && 
 
 /** One cache for the page. An ended session takes the person away, and the gate asks to sign in again. */
 export function createQueryClient(): QueryClient {
+  const onError = (error: Error): void => {
+    if (isSignedOut(error)) client.setQueryData(meKey, null);
+  };
   const client: QueryClient = new QueryClient({
-    queryCache: new QueryCache({
-      onError: (error) => {
-        if (isSignedOut(error)) client.setQueryData(meKey, null);
-      },
-    }),
+    queryCache: new QueryCache({ onError }),
+    mutationCache: new MutationCache({ onError }),
     defaultOptions: {
       queries: {
         staleTime: 20_000,

@@ -5,6 +5,7 @@ import { SinkPage } from '../features/sink/pages/sink-page.js';
 import { NotFoundPage } from '../shared/ui/not-found-page.js';
 import { Waiting } from '../shared/ui/waiting.js';
 import { BottleLink } from './bottle-link.js';
+import { BrokenPage } from './broken-page.js';
 import { DarkroomFrame } from './frame/darkroom-frame.js';
 import { SignInGate } from './sign-in-gate.js';
 
@@ -52,6 +53,7 @@ export const routes: RouteObject[] = [
   },
   {
     element: <SignInGate />,
+    errorElement: <BrokenPage />,
     children: [
       { path: '/', element: <HomePage /> },
       { path: '/b/:darkroomId/:code', element: <BottleLink /> },

@@ -1,6 +1,6 @@
 import { screen, waitFor, within } from '@testing-library/react';
-import { describe, expect, it } from 'vitest';
-import type { BottleList, LoadContent } from '../shared/api/types.js';
+import { afterEach, describe, expect, it, vi } from 'vitest';
+import type { BottleList, BottleView, LoadContent } from '../shared/api/types.js';
 import { fakeApi, type Handler, held } from '../testing/fake-api.js';
 import {
   bottle,
@@ -31,13 +31,31 @@ function sinkWith(list: BottleList, loads?: Handler, more: Record<string, Handle
   });
 }
 const contentOf = (body: unknown): LoadContent => (body as { content: LoadContent }).content;
+/** The fixer's own row: the stop bath beside it has rolls left too. */
+const fixerWith = (rolls: number) =>
+  screen.findByRole('button', { name: new RegExp(`^FX-01, .*: ${rolls} rolls left`) });
+/** A server that knows how many rolls the fixer has seen, so that fetching again agrees with its answers. */
+function fixerAtServer(rolls: number) {
+  const server = {
+    list: bottleList([{ code: 'FX-01', document: fixer, rolls }]),
+    put: (now: number, actionId = 'load'): BottleView => {
+      const after = bottle({ code: 'FX-01', document: fixer, rolls: now });
+      const view = { ...after, totals: { ...after.totals, lastActionId: actionId } };
+      server.list = { ...server.list, bottles: [view] };
+      return view;
+    },
+  };
+  return server;
+}
 const row = (code: string) => screen.getByRole('button', { name: new RegExp(`^${code}, `) });
+
+afterEach(() => vi.useRealTimers());
 
 describe('the sink', () => {
   it('lists the bottles in the order film meets them, each with its sentence', async () => {
     sinkWith(bottleList(three));
     renderAt('/d/harbour/sink');
-    await screen.findByText(/^13 rolls left/);
+    await fixerWith(13);
     const codes = within(screen.getByRole('list', { name: 'Bottles in use' }))
       .getAllByText(/^[A-Z]{2}-\d\d$/)
       .map((one) => one.textContent);
@@ -57,7 +75,7 @@ describe('the sink', () => {
     expect(await screen.findByText(/The sink could not be fetched\./)).toBeVisible();
     works = true;
     await user.click(screen.getByRole('button', { name: 'Try again' }));
-    expect(await screen.findByText(/^13 rolls left/)).toBeVisible();
+    expect(await fixerWith(13)).toBeVisible();
   });
 
   it('says so when nothing stands there', async () => {
@@ -69,12 +87,15 @@ describe('the sink', () => {
 
   it('puts a load through all bottles in two taps, and shows it before the answer', async () => {
     const answer = held<{ body: unknown }>();
-    const api = sinkWith(bottleList(three), () => answer.promise);
+    let list = bottleList(three);
+    const api = sinkWith(list, () => answer.promise, {
+      'GET /darkrooms/harbour/bottles?state=in-use': () => ({ body: list }),
+    });
     const { user } = renderAt('/d/harbour/sink');
     await user.click(await screen.findByRole('button', { name: 'Put a load through' }));
     await user.click(await screen.findByRole('button', { name: 'Put 1 roll through 3 bottles' }));
 
-    expect(await screen.findByText(/^12 rolls left/)).toBeInTheDocument();
+    expect(await fixerWith(12)).toBeInTheDocument();
     expect(screen.getByRole('status', { name: 'What was just done' })).toHaveTextContent(
       '1 roll of 135 is in.',
     );
@@ -86,8 +107,10 @@ describe('the sink', () => {
     });
 
     // The server knows of another load besides: its answer takes the place of what was reckoned here.
-    answer.release({ body: loadAnswer('x', [bottle({ code: 'FX-01', document: fixer, rolls: 10 })]) });
-    expect(await screen.findByText(/^10 rolls left/)).toBeInTheDocument();
+    const told = bottle({ code: 'FX-01', document: fixer, rolls: 10 });
+    list = { ...list, bottles: list.bottles.map((one) => (one.id === told.id ? told : one)) };
+    answer.release({ body: loadAnswer('x', [told]) });
+    expect(await fixerWith(10)).toBeInTheDocument();
   });
 
   it('takes the change back with the server’s sentence when that says no', async () => {
@@ -96,62 +119,73 @@ describe('the sink', () => {
     const { user } = renderAt('/d/harbour/sink');
     await user.click(await screen.findByRole('button', { name: 'Put a load through' }));
     await user.click(await screen.findByRole('button', { name: /^Put 1 roll/ }));
-    expect(await screen.findByText(/^12 rolls left/)).toBeInTheDocument();
+    expect(await fixerWith(12)).toBeInTheDocument();
     answer.release({ status: 422, body: { code: 'too-early', detail: 'FX-01 was not mixed then.' } });
-    expect(await screen.findByText(/^13 rolls left/)).toBeInTheDocument();
+    expect(await fixerWith(13)).toBeInTheDocument();
     expect(screen.getByText('FX-01 was not mixed then.')).toBeInTheDocument();
     expect(screen.queryByRole('button', { name: 'Undo' })).not.toBeInTheDocument();
   });
 
   it('sends the same id and content again when nobody answered', async () => {
+    const server = fixerAtServer(7);
     let tries = 0;
-    const api = sinkWith(bottleList(three), () => {
-      tries += 1;
-      if (tries === 1) return 'no signal';
-      return { body: loadAnswer('x', [bottle({ code: 'FX-01', document: fixer, rolls: 8 })]) };
-    });
-    const { user } = renderAt('/d/harbour/sink');
-    await user.click(await screen.findByRole('button', { name: 'Put a load through' }));
-    await user.click(await screen.findByRole('button', { name: /^Put 1 roll/ }));
-    await waitFor(() => expect(api.sent('PUT')).toHaveLength(2), { timeout: 4_000 });
-    const [first, second] = api.sent('PUT');
-    expect(second?.path).toBe(first?.path);
-    expect(contentOf(second?.body)).toEqual(contentOf(first?.body));
-    expect(screen.getByText(/^12 rolls left/)).toBeInTheDocument();
-  });
-
-  it('undoes at once, by a void that names the load', async () => {
-    const voided = held<{ body: unknown }>();
     const api = sinkWith(
-      bottleList(three),
-      ({ path }) => {
-        const id = path.split('/').at(-1) ?? '';
-        const after = bottle({ code: 'FX-01', document: fixer, rolls: 8 });
-        return { body: loadAnswer(id, [{ ...after, totals: { ...after.totals, lastActionId: id } }]) };
+      server.list,
+      () => {
+        tries += 1;
+        return tries === 1 ? 'no signal' : { body: loadAnswer('x', [server.put(8)]) };
       },
-      { 'PUT /darkrooms/harbour/voids/*': () => voided.promise },
+      { 'GET /darkrooms/harbour/bottles?state=in-use': () => ({ body: server.list }) },
     );
     const { user } = renderAt('/d/harbour/sink');
     await user.click(await screen.findByRole('button', { name: 'Put a load through' }));
     await user.click(await screen.findByRole('button', { name: /^Put 1 roll/ }));
-    await screen.findByText(/^12 rolls left/);
+    expect(await fixerWith(12)).toBeInTheDocument();
+    await waitFor(() => expect(api.sent('PUT')).toHaveLength(2));
+    const [first, second] = api.sent('PUT');
+    expect(second?.path).toBe(first?.path);
+    expect(contentOf(second?.body)).toEqual(contentOf(first?.body));
+    expect(await fixerWith(12)).toBeInTheDocument();
+  });
+
+  it('undoes at once, by a void that names the load', async () => {
+    const server = fixerAtServer(7);
+    const voided = held<{ body: unknown }>();
+    const api = sinkWith(
+      server.list,
+      ({ path }) => ({ body: loadAnswer('x', [server.put(8, path.split('/').at(-1))]) }),
+      {
+        'GET /darkrooms/harbour/bottles?state=in-use': () => ({ body: server.list }),
+        'PUT /darkrooms/harbour/voids/*': () => voided.promise,
+      },
+    );
+    const { user } = renderAt('/d/harbour/sink');
+    await user.click(await screen.findByRole('button', { name: 'Put a load through' }));
+    await user.click(await screen.findByRole('button', { name: /^Put 1 roll/ }));
+    expect(await fixerWith(12)).toBeInTheDocument();
     await user.click(await screen.findByRole('button', { name: 'Undo' }));
     // The void is still on its way, and the roll is back.
-    expect(await screen.findByText(/^13 rolls left/)).toBeInTheDocument();
+    expect(await fixerWith(13)).toBeInTheDocument();
     expect(screen.getByText('Undone: 1 roll of 135.')).toBeInTheDocument();
     await waitFor(() => expect(api.sent('PUT')).toHaveLength(2));
     const [load, undo] = api.sent('PUT');
     expect(undo?.body).toMatchObject({ content: { voidedActionId: load?.path.split('/').at(-1) } });
   });
 
-  it('opens nothing by the second tap of a double tap', async () => {
+  it('opens nothing by the second tap of a double tap, and opens again a moment later', async () => {
+    vi.useFakeTimers({ toFake: ['Date'] });
     const api = sinkWith(bottleList(three), () => ({ body: loadAnswer('x', []) }));
     const { user } = renderAt('/d/harbour/sink');
     const foot = await screen.findByRole('button', { name: 'Put a load through' });
     await user.click(foot);
     await user.dblClick(await screen.findByRole('button', { name: /^Put 1 roll/ }));
+    await waitFor(() => expect(screen.queryByRole('radio')).not.toBeInTheDocument());
+    vi.advanceTimersByTime(799);
     await user.click(foot);
-    expect(screen.queryByRole('dialog', { name: 'Put a load through' })).not.toBeInTheDocument();
+    expect(screen.queryByRole('radio')).not.toBeInTheDocument();
+    vi.advanceTimersByTime(1);
+    await user.click(foot);
+    expect(await screen.findByRole('radio', { name: '135' })).toBeInTheDocument();
     expect(api.sent('PUT')).toHaveLength(1);
   });
 });
@@ -160,7 +194,7 @@ describe('the load sheet', () => {
   it('says over-use before, and names it on the button', async () => {
     sinkWith(bottleList([{ code: 'FX-01', document: fixer, rolls: 14 }]));
     const { user } = renderAt('/d/harbour/sink');
-    await screen.findByText(/^6 rolls left/);
+    await fixerWith(6);
     await user.click(row('FX-01'));
     await user.type(await screen.findByRole('textbox', { name: 'How many' }), '8');
     expect(await screen.findByText('FX-01 has 6 rolls left, this is 8: 2 over')).toBeVisible();
@@ -210,6 +244,27 @@ describe('the load sheet', () => {
     await user.click(await screen.findByRole('button', { name: 'Put a load through' }));
     expect(await screen.findByRole('button', { name: 'Put 1 roll through FX-01' })).toBeVisible();
     expect(screen.getByText(/^SB-02: Spent: 12 of 12 rolls used/)).toBeVisible();
+  });
+
+  it('takes a sheet of any size once both its sides are said', async () => {
+    const api = sinkWith(bottleList([{ code: 'FX-01', document: fixer }]), () => ({
+      body: loadAnswer('x', []),
+    }));
+    const { user } = renderAt('/d/harbour/sink');
+    await user.click(await screen.findByRole('button', { name: 'Put a load through' }));
+    await user.click(await screen.findByRole('button', { name: 'More: Format' }));
+    await user.click(screen.getByRole('radio', { name: 'Other sheet' }));
+    expect(screen.getByText('Say its width and height.')).toBeVisible();
+    expect(screen.queryByRole('button', { name: /^Put 1/ })).not.toBeInTheDocument();
+    await user.type(screen.getByRole('textbox', { name: 'Width' }), '203.2');
+    await user.type(screen.getByRole('textbox', { name: 'Height' }), '254');
+    // 203.2 × 254 mm is 516.128 cm², one roll: 8 in × 10 in by 1 in = 2.54 cm.
+    expect(screen.getByText('1 sheet = 1 roll')).toBeVisible();
+    await user.click(screen.getByRole('button', { name: 'Put 1 sheet through FX-01' }));
+    await waitFor(() => expect(api.sent('PUT')).toHaveLength(1));
+    expect(contentOf(api.sent('PUT')[0]?.body).film).toEqual([
+      { format: 'sheet', widthMm: 203.2, heightMm: 254, count: 1, filmClass: 'conventional' },
+    ]);
   });
 
   it('remembers format and film for the next load', async () => {

@@ -40,7 +40,9 @@ const base = defineConfig({
 const own = defineConfig({
   globalCss: {
     html: { colorPalette: 'brand', bg: 'bg', color: 'ink', fontVariantNumeric: 'tabular-nums lining-nums' },
-    body: { bg: 'bg', color: 'ink', fontSize: 'text', overflowWrap: 'anywhere' },
+    body: { bg: 'bg', color: 'ink', fontSize: 'text' },
+    // On every element, for the reset sets it on every element: long names wrap, and never widen the page.
+    '*': { overflowWrap: 'anywhere' },
     '*:focus-visible': { outline: '3px solid {colors.focus}', outlineOffset: '2px' },
   },
   theme: {

@@ -9,6 +9,9 @@ const CLAIM = 20;
 /** A claim lasts so long: what dies at its work is taken up again after that. */
 const CLAIM_MS = 5 * 60_000;
 
+/** The directory has no row security: it is held by hand to the darkroom that the transaction is in. */
+const isEntered = sql`${darkrooms.id} = nullif(current_setting('app.darkroom', true), '')::uuid`;
+
 export interface Claimed {
   darkroomId: string;
   zone: string;
@@ -73,7 +76,7 @@ export class SweepRepository {
     await tx
       .select({ id: darkrooms.id })
       .from(darkrooms)
-      .where(eq(darkrooms.id, darkroomId))
+      .where(and(eq(darkrooms.id, darkroomId), isEntered))
       .for('no key update');
     const later = new Date(now.getTime() + CLAIM_MS).toISOString();
     const at = now.toISOString();
@@ -85,6 +88,6 @@ export class SweepRepository {
             when state = 'waiting' and due_at > ${at}::timestamptz then due_at
             else ${later}::timestamptz end)
           from mails where darkroom_id = ${darkroomId} and state in ('waiting', 'leased')))
-      where id = ${darkroomId}`);
+      where id = ${darkroomId} and ${isEntered}`);
   }
 }

@@ -2,6 +2,7 @@ import { Injectable, type OnModuleInit } from '@nestjs/common';
 import { flagsFor, type BottleFact } from '@wetside/chemistry';
 import type { Me } from '../../platform/auth/me.js';
 import type { Tx } from '../../platform/database/database.js';
+import { isForeignKeyViolation } from '../../platform/database/sql-errors.js';
 import { problem } from '../../platform/errors/problem.js';
 import { ActionRecorder, type PutAction, type Recorded } from '../../platform/ledger/action-recorder.js';
 import type { ActionRow } from '../../platform/ledger/actions.repository.js';
@@ -45,12 +46,13 @@ export class LoadsService implements OnModuleInit {
 
   /** A load that happened is recorded, whatever stood against it; what stood against it is flagged. */
   put(enter: Entrance, put: PutAction & { content: LoadContentDto }): Promise<Recorded<LoadAnswer>> {
-    return this.recorder.record(
+    const recorded = this.recorder.record(
       enter,
       put,
       (tx, recording) => this.count(tx, recording, put.content),
       (tx, me) => this.answer(tx, me, put.id),
     );
+    return recorded.catch(refuseUnknown);
   }
 
   private async count(tx: Tx, recording: Recording, content: LoadContentDto): Promise<void> {
@@ -138,6 +140,12 @@ export class LoadsService implements OnModuleInit {
       bottles: views,
     };
   }
+}
+
+/** A film's owner or a line that is not of this darkroom. @throws Problem 'not-found', or what it was */
+function refuseUnknown(error: unknown): never {
+  const named = ['load_film_membership_fk', 'loads_line_version_fk'];
+  throw named.some((key) => isForeignKeyViolation(error, key)) ? problem('not-found') : error;
 }
 
 /** @throws Problem 'bottle-taken-back' */

@@ -28,3 +28,9 @@ export function isUniqueViolation(error: unknown, constraintName: string): boole
   const found = sqlErrorOf(error);
   return found?.code === '23505' && found.constraint_name === constraintName;
 }
+
+/** Whether the row was refused because what it names is not there (in its darkroom). */
+export function isForeignKeyViolation(error: unknown, constraintName: string): boolean {
+  const found = sqlErrorOf(error);
+  return found?.code === '23503' && found.constraint_name === constraintName;
+}

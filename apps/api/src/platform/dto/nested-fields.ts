@@ -19,7 +19,7 @@ export function Nested(classOf: ClassOf, options: FieldOptions = {}): PropertyDe
   const message = 'Fill this part in.';
   return field(
     options,
-    { ...presence(options), type: classOf },
+    { ...presence(options), type: () => classOf() },
     Type(classOf),
     IsObject({ message }),
     ValidateNested({ message }),
@@ -30,7 +30,7 @@ export function Nested(classOf: ClassOf, options: FieldOptions = {}): PropertyDe
 export function ListOf(classOf: ClassOf, { min = 0, max, ...options }: ListOptions): PropertyDecorator {
   return field(
     options,
-    { ...presence(options), type: classOf, isArray: true, minItems: min, maxItems: max },
+    { ...presence(options), type: () => classOf(), isArray: true, minItems: min, maxItems: max },
     Type(classOf),
     ...listChecks(min, max),
     ValidateNested({ each: true, message: 'Each of these must be filled in.' }),

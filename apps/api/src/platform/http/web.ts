@@ -21,14 +21,16 @@ export function serveWeb(app: NestExpressApplication, folder: string): void {
     },
   });
   app.use((request: Request, response: Response, next: NextFunction) => {
-    if (!isPage(request)) return next();
+    if (isApi(request)) return next();
+    // Answered here, for the framework's own page of this kind would put other headers in place of ours.
+    if (!isPage(request)) return void response.status(404).type('text/plain').send('Not found.\n');
     response.sendFile('index.html', { root: folder, headers: { 'cache-control': 'no-cache' } }, (error) => {
       if (error) next(error);
     });
   });
 }
 
-function isPage({ method, path }: Request): boolean {
-  if (method !== 'GET' && method !== 'HEAD') return false;
-  return path !== '/api' && !path.startsWith('/api/') && !path.includes('.');
-}
+const isApi = ({ path }: Request): boolean => path === '/api' || path.startsWith('/api/');
+
+const isPage = ({ method, path }: Request): boolean =>
+  (method === 'GET' || method === 'HEAD') && !path.includes('.');

@@ -2,7 +2,7 @@ import { ApiProperty } from '@nestjs/swagger';
 import { actionKinds, type ActionKind } from '@wetside/db';
 import type { Me } from '../auth/me.js';
 import type { ActionWithPeople } from './actions.repository.js';
-import { mayVoid } from './undo-rule.js';
+import { canBeVoided, mayVoid } from './undo-rule.js';
 
 export class ActorView {
   @ApiProperty({ format: 'uuid' })
@@ -70,6 +70,6 @@ export function toActionView(
     seq: action.seq,
     by: { membershipId: action.membershipId, displayName },
     voidedBy: voidedBy && { ...voidedBy, at: voidedBy.at.toISOString() },
-    canUndo: !voidedBy && action.kind !== 'void' && mayVoid(action, me, now) === 'yes',
+    canUndo: !voidedBy && canBeVoided(action.kind) && mayVoid(action, me, now) === 'yes',
   };
 }

@@ -1,7 +1,13 @@
+import type { ActionKind } from '@wetside/db';
 import { reaches, type Role } from '../auth/roles.js';
 
 export const UNDO_HOURS = 12;
 const UNDO_MS = UNDO_HOURS * 3_600_000;
+
+/** What has left the house cannot be taken back: an order that went out is cancelled, a void is answered by doing it anew. */
+const NEVER: readonly ActionKind[] = ['void', 'order-send', 'order-cancel'];
+
+export const canBeVoided = (kind: ActionKind): boolean => !NEVER.includes(kind);
 
 export type MayVoid = 'yes' | 'too-late' | 'not-yours';
 

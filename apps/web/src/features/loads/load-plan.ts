@@ -1,7 +1,7 @@
 import { chargeFor, roundLeftDown, roundUsedUp } from '@wetside/chemistry';
 import type { FilmLine } from '../../shared/api/types.js';
 import { countOf, listOf, rollsLeft } from '../../shared/formats/amounts.js';
-import { pieces } from '../../shared/formats/film-words.js';
+import { isMeasured, pieces } from '../../shared/formats/film-words.js';
 import { isEssential } from '../bottles/line-order.js';
 import { stateWord } from '../../shared/ui/state-mark.js';
 import type { Standing } from '../bottles/standing.js';
@@ -40,6 +40,7 @@ const usable = ({ assessment }: Standing): boolean => !assessment.closed;
 
 function leftAfter({ assessment, document }: Standing, film: FilmLine) {
   const leftE4 = assessment.leftE4.film;
+  if (!isMeasured(film)) return null;
   const { countedE4 } = chargeFor(document, [film], 'film');
   return typeof leftE4 === 'number' ? { leftE4, countedE4, afterE4: leftE4 - countedE4 } : null;
 }
@@ -85,7 +86,7 @@ export function planLoad({ baths, leftOut, reported, film }: Choice): LoadPlan {
   const isReport = through.some((bath) => reported.has(bath.bottle.id));
   const over = through.filter(usable).flatMap((bath) => overOf(bath, film));
   const leaves = leavesWords(through.filter(usable), film);
-  const ready = through.length > 0 && blocking.length === 0;
+  const ready = through.length > 0 && blocking.length === 0 && isMeasured(film);
   const button = ready ? buttonWords({ through, over, isReport }, film) : null;
   return { through, closed, blocking, over, leaves, button, isReport };
 }

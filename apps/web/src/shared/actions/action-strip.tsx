@@ -1,15 +1,26 @@
 import { Box, Button, Flex } from '@chakra-ui/react';
+import { onlineManager } from '@tanstack/react-query';
+import { useSyncExternalStore } from 'react';
 import { useStore } from '../store.js';
 import { clearStrip, type Strip, strip as stripStore } from './strip.store.js';
 import { useUndo } from './use-undo.js';
 
-const wordsFor = ({ state, words }: Strip): string =>
-  state === 'unsent' ? `No signal. Not sent yet: ${words}` : words;
+function wordsFor({ state, words, why }: Strip, online: boolean): string {
+  if (state === 'unsent') return `${why ?? 'No signal.'} Not sent yet: ${words}`;
+  return state === 'sending' && !online ? `No signal. Not sent yet: ${words}` : words;
+}
+
+const useOnline = (): boolean =>
+  useSyncExternalStore(
+    (listener) => onlineManager.subscribe(listener),
+    () => onlineManager.isOnline(),
+  );
 
 /** What was just done, said once to a screen reader, and the way back. */
 export function ActionStrip() {
   const strip = useStore(stripStore);
   const undo = useUndo();
+  const online = useOnline();
   return (
     <Box role="status" aria-label="What was just done">
       {strip && (
@@ -25,7 +36,7 @@ export function ActionStrip() {
           borderColor="rule"
         >
           <Box flex="1 1 8rem" color={strip.state === 'refused' ? 'state.stop' : 'ink'}>
-            {wordsFor(strip)}
+            {wordsFor(strip, online)}
           </Box>
           {strip.state === 'unsent' && strip.again && (
             <Button variant="outline" minH="11" onClick={strip.again}>

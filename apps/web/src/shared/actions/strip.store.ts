@@ -9,6 +9,8 @@ export interface Strip {
   canUndo: boolean;
   /** What is said once it is undone: 'Undone: 2 rolls of 135.' */
   undone?: string | undefined;
+  /** Why it is not sent. */
+  why?: string;
   /** Sends the same action again, under its own id. */
   again?: () => void;
 }

@@ -1,6 +1,6 @@
 import { type QueryClient, useMutation, useQueryClient } from '@tanstack/react-query';
 import { useRef } from 'react';
-import { isUncertain, wordsOf } from '../api/problem.js';
+import { isPassing, isUncertain, wordsOf } from '../api/problem.js';
 import { keptKey, type Kept } from '../api/query-keys.js';
 import type { ActionAnswer } from '../api/types.js';
 import { useDarkroom } from '../darkroom/darkroom-context.js';
@@ -53,7 +53,7 @@ export function useAction<Content extends object, Answer extends ActionAnswer>(
     mutationKey: ['action', darkroom, recipe.plural],
     scope: { id: `actions of ${darkroom}` },
     mutationFn: ({ told }) => sendAction<Answer>(darkroom, recipe.plural, told),
-    retry: (failures, error) => isUncertain(error) && failures < TRIES_AGAIN,
+    retry: (failures, error) => isPassing(error) && failures < TRIES_AGAIN,
     retryDelay: waitMs,
     onMutate: ({ told, content, options }) => {
       const changes = recipe.changes?.(content) ?? [];
@@ -81,7 +81,7 @@ export function useAction<Content extends object, Answer extends ActionAnswer>(
       if (isUncertain(error)) {
         // It may have arrived: what is shown stays, and the same id is the only safe way to ask again.
         const again = (): void => mutation.mutate(sending);
-        updateStrip(actionId, { state: 'unsent', again });
+        updateStrip(actionId, { state: 'unsent', why: wordsOf(error), again });
         return;
       }
       removePending(actionId);

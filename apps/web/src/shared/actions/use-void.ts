@@ -14,5 +14,15 @@ export const useVoid = () =>
     plural: 'voids',
     restores: ({ voidedActionId }) => ({ actionId: voidedActionId, before: beforeOf(voidedActionId) }),
     settle: (client, darkroom, { bottles }) => settleBottles(client, darkroom, bottles),
-    touches: ['bottles', 'bottle', 'log', 'needs-you', 'shelf', 'orders', 'order', 'chemistries'],
+    touches: [
+      'bottles',
+      'bottle',
+      'log',
+      'needs-you',
+      'shelf',
+      'orders',
+      'order',
+      'chemistries',
+      'suppliers',
+    ],
   });

@@ -48,6 +48,10 @@ export const isUncertain = (error: unknown): boolean =>
   error instanceof NetworkError ||
   (error instanceof ProblemError && (error.status >= 500 || error.status === 429 || error.status === 401));
 
+/** Worth another try at once: nothing but time stands in the way. */
+export const isPassing = (error: unknown): boolean =>
+  isUncertain(error) && !(error instanceof ProblemError && error.status === 401);
+
 /** Words for any failure. */
 export const wordsOf = (error: unknown): string =>
   error instanceof ProblemError ? error.detail : 'No signal. Nothing came back from the server.';

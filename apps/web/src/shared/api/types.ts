@@ -34,7 +34,8 @@ export interface DarkroomMember {
   membershipId: string;
   displayName: string;
   role: MemberRole;
-  leftAt: string | null;
+  /** Absent where the list holds only those who are here. */
+  leftAt?: string | null;
 }
 
 export interface ActionView {
@@ -132,7 +133,6 @@ export interface LoadContent {
   material: Material;
   film: FilmLine[];
   reported?: boolean;
-  lineVersionId?: string | null;
   note?: string;
 }
 export interface LoadStep {
@@ -241,6 +241,7 @@ export interface Supplier {
   packs: SupplierPack[];
 }
 export type OrderState = 'draft' | 'sent' | 'received' | 'cancelled';
+export type MailState = 'waiting' | 'leased' | 'sent' | 'failed' | 'withdrawn';
 export interface OrderLine {
   id: string;
   supplierPackId: string;
@@ -267,7 +268,7 @@ export interface OrderView {
   sentAt: string | null;
   totalMinor: number | null;
   lines: OrderLine[];
-  mail: null | { state: string; lastAnswer: string | null };
+  mail: null | { state: MailState; lastAnswer: string | null };
 }
 export interface OrderPageData {
   order: OrderView;
@@ -277,15 +278,8 @@ export interface OrderAnswer extends ActionAnswer {
   order: OrderView;
 }
 
-export type EventKind =
-  | 'low'
-  | 'near-date'
-  | 'spent'
-  | 'past-date'
-  | 'on-hold'
-  | 'load-to-decide'
-  | 'reorder-point'
-  | 'none-on-shelf';
+type BottleEvent = 'low' | 'near-date' | 'spent' | 'past-date' | 'on-hold' | 'load-to-decide';
+export type EventKind = BottleEvent | 'reorder-point' | 'none-on-shelf';
 export interface NeedsYouRow {
   eventId: string;
   kind: EventKind;

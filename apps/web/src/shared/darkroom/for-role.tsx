@@ -20,8 +20,8 @@ interface Props {
 function NotAllowed({ least, what }: Omit<Props, 'children'>) {
   const { address } = useDarkroom();
   const { data } = useQuery(peopleQuery(address));
-  const names = (data?.people ?? [])
-    .filter((person) => person.leftAt === null && atLeast(person.role, least))
+  const names = (data ?? [])
+    .filter((person) => !person.leftAt && atLeast(person.role, least))
     .map((person) => person.displayName);
   return (
     <>

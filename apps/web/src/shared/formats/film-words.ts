@@ -43,14 +43,14 @@ export function filmPhrase(film: FilmLine): string {
   return `${pieces(film.format, film.count)} of ${size}`;
 }
 
+/** A sheet of another size counts only once both its sides are known. */
+export const isMeasured = (film: FilmLine): boolean =>
+  film.format !== 'sheet' || Boolean(film.widthMm && film.heightMm);
+
 /** '6 sheets = 1.5 rolls', or nothing where the pieces are rolls of the plain size. */
 export function equivalence(film: FilmLine): string | null {
   if (film.format === '135-36' || film.format === '120') return null;
-  if (film.format === 'sheet' && !(film.widthMm && film.heightMm)) return null;
-  try {
-    const used = rollsE4(filmFormat(film.format, film.widthMm, film.heightMm), film.count);
-    return `${pieces(film.format, film.count)} = ${rollsUsed(used)}`;
-  } catch {
-    return null;
-  }
+  if (!isMeasured(film)) return null;
+  const used = rollsE4(filmFormat(film.format, film.widthMm, film.heightMm), film.count);
+  return `${pieces(film.format, film.count)} = ${rollsUsed(used)}`;
 }

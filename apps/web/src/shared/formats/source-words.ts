@@ -8,9 +8,14 @@ const kinds: Record<Source['kind'], string> = {
   darkroom: 'set by this darkroom',
 };
 
+function oneSource({ kind, text }: Source): string {
+  const [start = ''] = kinds[kind].split(':');
+  return text.toLowerCase().startsWith(start) ? text : `${text} (${kinds[kind]})`;
+}
+
 /** Where a figure was read, in words, for each key that the document knows. */
 export const sourceWords = (document: ChemistryDocument, keys: readonly string[]): string[] =>
   [...new Set(keys)].flatMap((key) => {
     const source = document.sources[key];
-    return source ? [`${source.text} (${kinds[source.kind]})`] : [];
+    return source ? [oneSource(source)] : [];
   });

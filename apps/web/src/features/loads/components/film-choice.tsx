@@ -35,7 +35,7 @@ export function FilmChoice({ film, onChange }: Props) {
         options={inOrder}
         first={first.length}
         value={film.format}
-        onChange={(format) => onChange({ ...film, format })}
+        onChange={(format) => onChange({ format, count: film.count, filmClass: film.filmClass })}
       />
       {film.format === 'sheet' && (
         <Flex gap="3">

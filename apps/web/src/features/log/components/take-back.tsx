@@ -35,6 +35,7 @@ export function TakeBack({ entry: { action, sentence } }: { entry: LogEntry }) {
       <Button
         variant="plain"
         minH="11"
+        minW="11"
         px="1"
         textDecoration="underline"
         aria-label={`Void: ${sentence}`}

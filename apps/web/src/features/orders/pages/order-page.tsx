@@ -10,6 +10,7 @@ import { Fetched } from '../../../shared/ui/fetched.js';
 import { PageHeading, SectionHeading } from '../../../shared/ui/page-heading.js';
 import { useSuppliers } from '../../suppliers/api/get-suppliers.js';
 import { OutUntil } from '../../suppliers/components/out-until.js';
+import { mailWords } from '../mail-words.js';
 import { useOrder } from '../api/get-order.js';
 import { CancelSheet } from '../components/cancel-sheet.js';
 import { DraftForm } from '../components/draft-form.js';
@@ -67,8 +68,7 @@ function Order({ data }: { data: OrderPageData }) {
       {order.sentAt && (
         <Box>
           Sent {showInstant(order.sentAt, zone, today(zone))} by {order.sentBy}.
-          {order.mail &&
-            ` Mail: ${order.mail.state}${order.mail.lastAnswer ? `, ${order.mail.lastAnswer}` : ''}.`}
+          {order.mail && ` ${mailWords(order.mail)}`}
         </Box>
       )}
       <Grid

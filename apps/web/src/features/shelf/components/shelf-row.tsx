@@ -37,7 +37,7 @@ export function ShelfRow({ pack, today }: Props) {
             {pack.name}
           </chakra.h2>
           <Box color="ink.muted">
-            {pack.form}
+            {pack.form.replaceAll('-', ' ')}
             {makes.length > 0 && `, makes ${listOf(makes)}`}
           </Box>
           <Flex gap="2" align="center">
