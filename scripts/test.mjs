@@ -59,7 +59,11 @@ const parts = {
   },
   types: async () => checkCount(await run(process.execPath, [at('scripts/typecheck.mjs')])),
   pure: () => jest('pure', env),
-  postgresql: async () => jest('pg', await withDatabase()),
+  // Some of its tests start the built server.
+  postgresql: async () => {
+    await withBuild();
+    return jest('pg', await withDatabase());
+  },
   web: async () => {
     const file = `${results}/web.json`;
     const args = ['run', '--reporter=default', '--reporter=json', `--outputFile.json=${file}`];

@@ -4,7 +4,7 @@ import { memberships } from '@wetside/db';
 import { cloneDatabase, type TestDatabase } from '@wetside/db/testing/clone';
 import request from 'supertest';
 import { v7 } from 'uuid';
-import { readEnvironment } from '../config/environment.js';
+import { readEnvironment, type Environment } from '../config/environment.js';
 import type { Variables } from '../config/reader.js';
 import { createApp, startUp } from '../create-app.js';
 import { ProvisionService, type NewDarkroom } from '../features/darkrooms/provision.service.js';
@@ -15,6 +15,7 @@ import { Database } from '../platform/database/database.js';
 
 export const PASSPHRASE = 'four quiet trays by the sink';
 export const ORIGIN = 'http://localhost:55500';
+export const SECRET = 'a secret that is only ever used in tests';
 
 /** A browser of its own: it keeps its cookies and says where its requests come from. */
 export type Browser = ReturnType<typeof request.agent>;
@@ -32,16 +33,22 @@ export class TestApp {
     readonly db: TestDatabase,
   ) {}
 
-  static async start(variables: Variables = {}, extra: readonly Type[] = []): Promise<TestApp> {
+  /** @param changed settings that no variable reaches, such as the queue and the sweep being off */
+  static async start(
+    variables: Variables = {},
+    extra: readonly Type[] = [],
+    changed: Partial<Environment> = {},
+  ): Promise<TestApp> {
     const db = await cloneDatabase();
-    const environment = readEnvironment({
+    const read = readEnvironment({
       MODE: 'test',
       PUBLIC_ORIGIN: ORIGIN,
       DATABASE_URL: db.appUrl,
       DATABASE_JOBS_URL: db.jobsUrl,
-      SESSION_SECRET: 'a secret that is only ever used in tests',
+      SESSION_SECRET: SECRET,
       ...variables,
     });
+    const environment = Object.assign(read, changed);
     try {
       const app = await createApp(environment, extra);
       await startUp(app);

@@ -21,4 +21,10 @@ export const bottleProblems = {
     title: 'Not on hold',
     detail: (code: string) => `${code} is not on hold.`,
   },
+  'before-the-mix': {
+    status: 422,
+    title: 'Before it was mixed',
+    detail: (code: string) =>
+      `${code} was mixed more than a day after that. Correct the time, or the bottle.`,
+  },
 } satisfies Record<string, ProblemKind>;

@@ -9,6 +9,7 @@ import type { Recording } from '../../platform/ledger/recording.js';
 import { touched, VoidHandlers, type VoidHandler } from '../../platform/ledger/void-handlers.js';
 import { WarningsService } from '../alerts/warnings.service.js';
 import { BottleLedger } from '../bottles/bottle-ledger.js';
+import { keepAfterMix } from '../bottles/mix-time.js';
 import type { LockedBottle } from '../bottles/bottle-row.js';
 import { BottlesService } from '../bottles/bottles.service.js';
 import type { DiscardContentDto, HoldContentDto } from './hold.dto.js';
@@ -77,7 +78,7 @@ export class HoldsService implements OnModuleInit {
         const [bottle] = await this.ledger.lock(tx, recording.darkroomId, [bottleId]);
         if (!bottle?.totals) throw problem('not-found');
         refuse(bottle);
-        if (recording.happenedAt < bottle.madeAt) recording.moveTo(bottle.madeAt);
+        keepAfterMix(recording, [bottle]);
         await recording.add(tx);
         await write(tx, recording, bottleId);
         await this.ledger.advance(tx, recording.darkroomId, recording.now, [

@@ -1,12 +1,6 @@
 import type { ProblemKind } from '../../platform/errors/problem-kind.js';
 
 export const loadProblems = {
-  'before-the-mix': {
-    status: 422,
-    title: 'Before it was mixed',
-    detail: (code: string) =>
-      `${code} was mixed more than a day after that. Correct the time, or the bottle.`,
-  },
   'not-a-format': {
     status: 422,
     title: 'Not a format',
