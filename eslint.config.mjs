@@ -69,7 +69,7 @@ const arrows = [
   arrow('web-feature', ['web-feature', 'web-shared', 'web-theme', 'package']),
   arrow('web-app', ['web-app', 'web-feature', 'web-shared', 'web-theme', 'package']),
   arrow('mail-catcher', ['mail-catcher']),
-  arrow('e2e', ['e2e', 'package', 'mail-catcher']),
+  arrow('e2e', ['e2e', 'db', 'package', 'mail-catcher']),
 ];
 
 export default tseslint.config(

@@ -13,7 +13,7 @@ export function serveWeb(app: NestExpressApplication, folder: string): void {
   const hashed = join(folder, 'assets') + sep;
   app.useStaticAssets(folder, {
     index: false,
-    setHeaders: (response, path) => {
+    setHeaders: (response: Response, path: string) => {
       response.setHeader(
         'cache-control',
         path.startsWith(hashed) ? `public, max-age=${YEAR_S}, immutable` : 'no-cache',
