@@ -2,15 +2,13 @@ import { Injectable } from '@nestjs/common';
 import { bottleTotals, darkrooms, mails } from '@wetside/db';
 import { and, asc, eq, lte, sql } from 'drizzle-orm';
 import type { Tx } from '../../platform/database/database.js';
+import { isEntered } from '../../platform/jobs/next-check.js';
 import { isDue } from '../../platform/mail/mails.repository.js';
 
 /** Darkrooms that one claim takes at the most; the rest is for the next claim, or for another server. */
 const CLAIM = 20;
 /** A claim lasts so long: what dies at its work is taken up again after that. */
 const CLAIM_MS = 5 * 60_000;
-
-/** The directory has no row security: it is held by hand to the darkroom that the transaction is in. */
-const isEntered = sql`${darkrooms.id} = nullif(current_setting('app.darkroom', true), '')::uuid`;
 
 export interface Claimed {
   darkroomId: string;

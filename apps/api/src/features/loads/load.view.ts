@@ -1,10 +1,18 @@
 import { ApiProperty } from '@nestjs/swagger';
-import { filmClasses, materials, type FilmClass, type Material, type StepFlag } from '@wetside/chemistry';
+import {
+  filmClasses,
+  materials,
+  namedFormats,
+  sheetFormat,
+  type FilmClass,
+  type Material,
+  type StepFlag,
+} from '@wetside/chemistry';
 import { BottleView } from '../bottles/bottle.view.js';
 import { ActionView } from '../../platform/ledger/action.view.js';
 
 export class LoadFilmView {
-  @ApiProperty()
+  @ApiProperty({ enum: [...namedFormats, sheetFormat] })
   format: string;
 
   @ApiProperty({ type: Number, nullable: true })

@@ -1,6 +1,8 @@
 import { ApiProperty } from '@nestjs/swagger';
 import { materials, type ChemistryDocument, type Material } from '@wetside/chemistry';
 import { containerKinds, containerMaterials } from '@wetside/db';
+import { Type } from 'class-transformer';
+import { IsObject, ValidateNested } from 'class-validator';
 import { Choice, Id, ListOfIds, Nested, Text, WholeNumber } from '../../platform/dto/fields.js';
 import { ActionContentDto } from '../../platform/ledger/action-content.dto.js';
 import { ActionView } from '../../platform/ledger/action.view.js';
@@ -21,6 +23,22 @@ export class ContainerDto {
   @Choice(containerMaterials, { optional: true })
   material?: (typeof containerMaterials)[number];
 }
+
+const ID_SCHEMA = { type: 'string', format: 'uuid' };
+
+const fromShape = (kind: string, fields: Record<string, object>) => ({
+  type: 'object',
+  required: ['kind', ...Object.keys(fields)],
+  properties: { kind: { type: 'string', enum: [kind] }, ...fields },
+});
+
+/** What each kind of source needs beside its kind, for the OpenAPI document. */
+const FROM_SHAPES = [
+  fromShape('lot', { lotId: ID_SCHEMA }),
+  fromShape('opened', { openedPackIds: { type: 'array', items: ID_SCHEMA, minItems: 1, maxItems: 8 } }),
+  fromShape('stock', { bottleId: ID_SCHEMA }),
+  fromShape('hand', {}),
+];
 
 export class MixFromDto {
   @Choice(['lot', 'opened', 'stock', 'hand'])
@@ -54,7 +72,10 @@ export class MixContentDto extends ActionContentDto {
   @Choice(materials, { nullable: true })
   material: Material | null;
 
-  @Nested(() => MixFromDto)
+  @ApiProperty({ oneOf: FROM_SHAPES })
+  @Type(() => MixFromDto)
+  @IsObject({ message: 'Fill this part in.' })
+  @ValidateNested({ message: 'Fill this part in.' })
   from: MixFromDto;
 
   @Text({ min: 0, max: 500, optional: true })

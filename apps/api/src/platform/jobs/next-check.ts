@@ -1,7 +1,10 @@
 import { Injectable } from '@nestjs/common';
 import { darkrooms } from '@wetside/db';
-import { eq, sql } from 'drizzle-orm';
+import { and, eq, sql } from 'drizzle-orm';
 import type { Tx } from '../database/database.js';
+
+/** The directory has no row security: it is held by hand to the darkroom that the transaction is in. */
+export const isEntered = sql`${darkrooms.id} = nullif(current_setting('app.darkroom', true), '')::uuid`;
 
 /** When the sweep must look at a darkroom again. Its row is the last lock of every transaction. */
 @Injectable()
@@ -15,6 +18,6 @@ export class NextCheck {
     await tx
       .update(darkrooms)
       .set({ nextCheckAt: sql`least(${darkrooms.nextCheckAt}, ${due.toISOString()}::timestamptz)` })
-      .where(eq(darkrooms.id, darkroomId));
+      .where(and(eq(darkrooms.id, darkroomId), isEntered));
   }
 }
