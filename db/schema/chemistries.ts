@@ -7,7 +7,6 @@ import {
   jsonb,
   pgTable,
   primaryKey,
-  text,
   unique,
   uuid,
 } from 'drizzle-orm/pg-core';

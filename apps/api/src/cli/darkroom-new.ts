@@ -26,9 +26,13 @@ function orderFrom(args: string[]): DarkroomOrder | null {
 async function askPassphrase(): Promise<string> {
   const lines = createInterface({ input: process.stdin });
   process.stdout.write('Passphrase of 15 characters or more (leave empty to have one made): ');
-  const { value } = await lines[Symbol.asyncIterator]().next();
+  let line = '';
+  for await (const first of lines) {
+    line = first;
+    break;
+  }
   lines.close();
-  if (typeof value === 'string' && value !== '') return value;
+  if (line !== '') return line;
   const made = randomSecret().slice(0, 24);
   process.stdout.write(`\nPassphrase made: ${made}\n`);
   return made;

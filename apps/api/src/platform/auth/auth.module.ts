@@ -31,6 +31,16 @@ import { Tokens } from './tokens.js';
     { provide: APP_GUARD, useClass: AuthGuard },
     { provide: APP_INTERCEPTOR, useClass: EnteredInterceptor },
   ],
-  exports: [Accounts, AddressesRepository, Cookies, Tokens, Passphrases, Throttle, SessionsRepository, Sessions, DarkroomAccess],
+  exports: [
+    Accounts,
+    AddressesRepository,
+    Cookies,
+    Tokens,
+    Passphrases,
+    Throttle,
+    SessionsRepository,
+    Sessions,
+    DarkroomAccess,
+  ],
 })
 export class AuthModule {}

@@ -48,8 +48,8 @@ function routesOf(controller: object, method: object, handler: string): Register
 }
 
 function accessOf(target: object): Access | null {
-  const found: Access | undefined = Reflect.getMetadata(ACCESS, target);
-  return found ?? null;
+  // Only the decorators of access.decorators.ts write under this key.
+  return (Reflect.getMetadata(ACCESS, target) as Access | undefined) ?? null;
 }
 
 function pathsOf(metadata: unknown): string[] | null {
