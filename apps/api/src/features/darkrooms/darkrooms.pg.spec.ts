@@ -37,7 +37,7 @@ describe('a darkroom', () => {
       currency: 'GBP',
       thresholds: {
         lowShareE4: 2000,
-        lowRollsE4: 20_000,
+        lowRollsE4: 30_000,
         nearDaysMax: 7,
         nearShareE4: 2500,
         smallestTankUl: 300_000,
