@@ -835,7 +835,24 @@ export interface components {
             container: components["schemas"]["ContainerDto"];
             /** @enum {string|null} */
             material: "film" | "rc-paper" | "fb-paper" | null;
-            from: components["schemas"]["MixFromDto"];
+            from: components["schemas"]["MixFromDto"] & ({
+                /** @enum {string} */
+                kind: "lot";
+                /** Format: uuid */
+                lotId: string;
+            } | {
+                /** @enum {string} */
+                kind: "opened";
+                openedPackIds: string[];
+            } | {
+                /** @enum {string} */
+                kind: "stock";
+                /** Format: uuid */
+                bottleId: string;
+            } | {
+                /** @enum {string} */
+                kind: "hand";
+            });
             note?: string;
         };
         PutMixDto: {
@@ -888,7 +905,8 @@ export interface components {
             envelope: components["schemas"]["EnvelopeDto"];
         };
         LoadFilmView: {
-            format: string;
+            /** @enum {string} */
+            format: "135-36" | "135-24" | "120" | "220" | "4x5" | "5x7" | "8x10" | "11x14" | "sheet";
             widthMm: number | null;
             heightMm: number | null;
             count: number;

@@ -1,5 +1,6 @@
 import { screen, waitFor } from '@testing-library/react';
 import { describe, expect, it } from 'vitest';
+import type { DarkroomMember } from '../shared/api/types.js';
 import { fakeApi, type Handler } from '../testing/fake-api.js';
 import { bottleList, darkroom, fixer, me } from '../testing/fixtures.js';
 import { renderAt } from '../testing/render-at.js';
@@ -87,18 +88,16 @@ describe('signing in', () => {
 
 describe('what a role may not do, and what is not there', () => {
   it('says whom to ask', async () => {
+    const joinedAt = '2026-01-01T00:00:00Z';
     fakeApi({
       'GET /me': () => ({ body: me() }),
       ...inside,
       'GET /darkrooms/harbour/people': () => ({
-        body: {
-          people: [
-            { membershipId: 'm-1', displayName: 'Ines', role: 'member', leftAt: null },
-            { membershipId: 'm-2', displayName: 'Tomas', role: 'technician', leftAt: null },
-            { membershipId: 'm-3', displayName: 'Ada', role: 'manager', leftAt: null },
-            { membershipId: 'm-4', displayName: 'Marek', role: 'manager', leftAt: '2026-01-01T00:00:00Z' },
-          ],
-        },
+        body: [
+          { membershipId: 'm-1', displayName: 'Ines', role: 'member', joinedAt },
+          { membershipId: 'm-2', displayName: 'Tomas', role: 'technician', joinedAt },
+          { membershipId: 'm-3', displayName: 'Ada', role: 'manager', joinedAt },
+        ] satisfies DarkroomMember[],
       }),
     });
     renderAt('/d/harbour/mixing/new');

@@ -223,7 +223,7 @@ describe('the load sheet', () => {
     const { user } = renderAt('/d/harbour/sink');
     await user.click(await screen.findByRole('button', { name: 'Put a load through' }));
     expect(await screen.findByText('FX-01: On hold by Tomas: cloudy.')).toBeVisible();
-    expect(screen.queryByRole('button', { name: /^Put .* through/ })).not.toBeInTheDocument();
+    expect(screen.queryByRole('button', { name: /^(Put|Report) \d/ })).not.toBeInTheDocument();
     await user.click(screen.getByRole('button', { name: 'It has been through FX-01 already' }));
     await user.click(screen.getByRole('button', { name: 'Report 1 roll through 2 bottles' }));
     await waitFor(() => expect(api.sent('PUT')).toHaveLength(1));
@@ -256,14 +256,14 @@ describe('the load sheet', () => {
     await user.click(screen.getByRole('radio', { name: 'Other sheet' }));
     expect(screen.getByText('Say its width and height.')).toBeVisible();
     expect(screen.queryByRole('button', { name: /^Put 1/ })).not.toBeInTheDocument();
-    await user.type(screen.getByRole('textbox', { name: 'Width' }), '203.2');
+    await user.type(screen.getByRole('textbox', { name: 'Width' }), '199.4');
     await user.type(screen.getByRole('textbox', { name: 'Height' }), '254');
-    // 203.2 × 254 mm is 516.128 cm², one roll: 8 in × 10 in by 1 in = 2.54 cm.
+    // 200 × 254 mm is 508 cm² of a roll's 516.128 (8 in × 10 in by 1 in = 2.54 cm), and is rounded up: arithmetic.
     expect(screen.getByText('1 sheet = 1 roll')).toBeVisible();
     await user.click(screen.getByRole('button', { name: 'Put 1 sheet through FX-01' }));
     await waitFor(() => expect(api.sent('PUT')).toHaveLength(1));
     expect(contentOf(api.sent('PUT')[0]?.body).film).toEqual([
-      { format: 'sheet', widthMm: 203.2, heightMm: 254, count: 1, filmClass: 'conventional' },
+      { format: 'sheet', widthMm: 200, heightMm: 254, count: 1, filmClass: 'conventional' },
     ]);
   });
 

@@ -20,11 +20,11 @@ const answerOf = (answer: Exclude<Answer, 'no signal'>): Response => {
  */
 export function fakeApi(handlers: Record<string, Handler>) {
   const asked: Asked[] = [];
-  const fake = async (input: RequestInfo | URL, init?: RequestInit): Promise<Response> => {
-    const url = input instanceof Request ? input.url : String(input);
-    const path = url.replace(/^.*\/api/, '');
-    const method = init?.method ?? 'GET';
-    const body: unknown = typeof init?.body === 'string' ? JSON.parse(init.body) : undefined;
+  const fake = async (request: Request): Promise<Response> => {
+    const { method } = request;
+    const path = request.url.replace(/^.*\/api/, '');
+    const text = await request.text();
+    const body: unknown = text === '' ? undefined : JSON.parse(text);
     const one = { method, path, body };
     asked.push(one);
     const wild = `${method} ${path.replace(/\?.*$/, '').replace(/\/[^/]+$/, '/*')}`;

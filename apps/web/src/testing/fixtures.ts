@@ -104,7 +104,7 @@ export function bottleList(sketches: readonly BottleSketch[]): BottleList {
   return { bottles: sketches.map(bottle), versions, today: localDate(reckonedNow(), zone) };
 }
 
-export const actionView = (id: string, kind: string): ActionView => ({
+export const actionView = (id: string, kind: ActionView['kind']): ActionView => ({
   id,
   kind,
   happenedAt: reckonedNow(),

@@ -6,9 +6,12 @@ const shapes: Record<EventKind, Shape> = {
   'past-date': 'octagon',
   'on-hold': 'octagon',
   'none-on-shelf': 'octagon',
+  'kit-past-expiry': 'octagon',
   low: 'triangle',
   'near-date': 'triangle',
   'reorder-point': 'triangle',
+  'kit-near-expiry': 'triangle',
+  'test-due': 'triangle',
   'load-to-decide': 'none',
 };
 const order: readonly Shape[] = ['octagon', 'triangle', 'none'];

@@ -1,17 +1,16 @@
-import { chargeFor, roundLeftDown, roundUsedUp } from '@wetside/chemistry';
+import { roundUsedUp } from '@wetside/chemistry';
 import type { FilmLine } from '../../shared/api/types.js';
 import { countOf, listOf, rollsLeft } from '../../shared/formats/amounts.js';
 import { isMeasured, pieces } from '../../shared/formats/film-words.js';
 import { isEssential } from '../bottles/line-order.js';
-import { stateWord } from '../../shared/ui/state-mark.js';
 import type { Standing } from '../bottles/standing.js';
+import type { BathPicks } from './bath-picks.js';
+import { isOpen, leftAfter, oneOfEachRole, passedOver } from './one-a-role.js';
 
 export interface Choice {
   /** The baths that the sheet was opened for. */
   baths: readonly Standing[];
-  leftOut: ReadonlySet<string>;
-  /** Closed bottles that the film has been through already. */
-  reported: ReadonlySet<string>;
+  picks: BathPicks;
   film: FilmLine;
 }
 
@@ -29,20 +28,13 @@ export interface LoadPlan {
   /** Closed, and without it the film is lost: nothing is put through until it is left out knowingly. */
   blocking: Standing[];
   over: Over[];
+  /** 'FX-01 has 1 roll left: this load goes through FX-02.' */
+  instead: string[];
   /** 'Leaves 11 rolls in FX-01.' */
   leaves: string | null;
   /** Null: there is nothing to put the load through. */
   button: string | null;
   isReport: boolean;
-}
-
-const usable = ({ assessment }: Standing): boolean => !assessment.closed;
-
-function leftAfter({ assessment, document }: Standing, film: FilmLine) {
-  const leftE4 = assessment.leftE4.film;
-  if (!isMeasured(film)) return null;
-  const { countedE4 } = chargeFor(document, [film], 'film');
-  return typeof leftE4 === 'number' ? { leftE4, countedE4, afterE4: leftE4 - countedE4 } : null;
 }
 
 function overOf(standing: Standing, film: FilmLine): Over[] {
@@ -76,19 +68,34 @@ function buttonWords(plan: Pick<LoadPlan, 'through' | 'over' | 'isReport'>, film
 const covered = (closed: Standing, through: readonly Standing[]): boolean =>
   through.some(({ bottle }) => bottle.role === closed.bottle.role);
 
-export function planLoad({ baths, leftOut, reported, film }: Choice): LoadPlan {
+/** Said when a load passes over the bottle whose turn it is: what is recorded must be what is poured. */
+function insteadWords(through: readonly Standing[], baths: readonly Standing[], film: FilmLine): string[] {
+  const open = baths.filter(isOpen);
+  return through.flatMap((bath) => {
+    const before = passedOver(bath, open, film);
+    const left = before && leftAfter(before, film);
+    if (!before || !left) return [];
+    return `${before.bottle.code} has ${rollsLeft(left.leftE4)} left: this load goes through ${bath.bottle.code}.`;
+  });
+}
+
+export function planLoad({ baths, picks, film }: Choice): LoadPlan {
+  const { chosen, leftOut, reported } = picks;
   const out = ({ bottle }: Standing): boolean => leftOut.has(bottle.id);
-  const through = baths.filter((bath) => !out(bath) && (usable(bath) || reported.has(bath.bottle.id)));
-  const closed = baths.filter((bath) => !usable(bath) && !reported.has(bath.bottle.id));
+  const able = baths.filter((bath) => isOpen(bath) || reported.has(bath.bottle.id));
+  const inTurn = oneOfEachRole(able, film, chosen);
+  const through = baths.filter((bath) => inTurn.includes(bath) && !out(bath));
+  const closed = baths.filter((bath) => !isOpen(bath) && !through.includes(bath));
   const blocking = closed.filter(
     (bath) => isEssential(bath.bottle.role) && !out(bath) && !covered(bath, through),
   );
   const isReport = through.some((bath) => reported.has(bath.bottle.id));
-  const over = through.filter(usable).flatMap((bath) => overOf(bath, film));
-  const leaves = leavesWords(through.filter(usable), film);
+  const over = through.filter(isOpen).flatMap((bath) => overOf(bath, film));
+  const leaves = leavesWords(through.filter(isOpen), film);
+  const instead = insteadWords(through.filter(isOpen), baths, film);
   const ready = through.length > 0 && blocking.length === 0 && isMeasured(film);
   const button = ready ? buttonWords({ through, over, isReport }, film) : null;
-  return { through, closed, blocking, over, leaves, button, isReport };
+  return { through, closed, blocking, over, instead, leaves, button, isReport };
 }
 
 /** 'FX-01 cannot be used: Past its date since 28 Feb.' */
@@ -97,17 +104,3 @@ export const closedWords = ({ bottle, sentence }: Standing): string => `${bottle
 /** 'FX-01 and SB-02': the codes of some bottles. */
 export const codesOf = (standings: readonly Standing[]): string =>
   listOf(standings.map(({ bottle }) => bottle.code));
-
-/** '13 rolls more. FX-01 gives out first.', or 'Not today. FX-01 is past its date.' */
-export function verdictWords(baths: readonly Standing[]): string | null {
-  const open = baths.filter(usable);
-  const stops = baths.find((bath) => !usable(bath) && isEssential(bath.bottle.role) && !covered(bath, open));
-  if (stops) return `Not today. ${stops.bottle.code} is ${stateWord(stops.assessment.verdict)}.`;
-  const needed = open.filter((bath) => !bath.document.cheapToRenew);
-  const known = (needed.length > 0 ? needed : open).flatMap(({ assessment, bottle }) =>
-    typeof assessment.leftE4.film === 'number' ? [{ code: bottle.code, leftE4: assessment.leftE4.film }] : [],
-  );
-  const [least] = known.sort((a, b) => a.leftE4 - b.leftE4);
-  if (!least) return null;
-  return `${countOf(roundLeftDown(least.leftE4), 'roll')} more. ${least.code} gives out first.`;
-}

@@ -5,14 +5,13 @@ import { keptKey, type Kept } from '../api/query-keys.js';
 import type { ActionAnswer } from '../api/types.js';
 import { useDarkroom } from '../darkroom/darkroom-context.js';
 import { addPending, type BottleChange, type PendingAction, removePending } from './pending.store.js';
-import { sendAction, tell, type Told } from './send-action.js';
+import { type PutAction, sendAction, tell, type Told } from './send-action.js';
 import { showStrip, updateStrip } from './strip.store.js';
 import { rememberBefore } from './undo-memory.js';
 
 /** What every action of the program says about itself; the recipe below does the rest. */
 export interface ActionRecipe<Content, Answer extends ActionAnswer> {
-  /** The word in its address: 'loads'. */
-  plural: string;
+  put: PutAction<Content, Answer>;
   /** What it does to bottles, shown before the server has answered. */
   changes?(content: Content): BottleChange[];
   restores?(content: Content): PendingAction['restores'];
@@ -50,9 +49,8 @@ export function useAction<Content extends object, Answer extends ActionAnswer>(
   const { address: darkroom } = useDarkroom();
 
   const mutation = useMutation<Answer, Error, Sending<Content>>({
-    mutationKey: ['action', darkroom, recipe.plural],
     scope: { id: `actions of ${darkroom}` },
-    mutationFn: ({ told }) => sendAction<Answer>(darkroom, recipe.plural, told),
+    mutationFn: ({ told }) => sendAction(recipe.put, darkroom, told),
     retry: (failures, error) => isPassing(error) && failures < TRIES_AGAIN,
     retryDelay: waitMs,
     onMutate: ({ told, content, options }) => {
@@ -73,7 +71,7 @@ export function useAction<Content extends object, Answer extends ActionAnswer>(
     onSuccess: (answer, { told }) => {
       recipe.settle?.(client, darkroom, answer);
       removePending(told.actionId);
-      updateStrip(told.actionId, { state: 'done' });
+      updateStrip(told.actionId, { state: 'done', ...(!answer.action.canUndo && { canUndo: false }) });
       for (const kept of recipe.touches) void client.invalidateQueries({ queryKey: keptKey(darkroom, kept) });
     },
     onError: (error, sending) => {

@@ -32,15 +32,14 @@ function fieldsOf(value: unknown): FieldProblem[] {
 }
 
 /** Reads a problem document; a body that is none still gives an error with words. */
-export async function problemOf(response: Response): Promise<ProblemError> {
-  const body: unknown = await response.json().catch(() => null);
+export function problemOf(status: number, body: unknown): ProblemError {
   const { code, detail, title, errors } = (body ?? {}) as Record<string, unknown>;
   const words = isText(detail)
     ? detail
     : isText(title)
       ? title
       : 'The server gave an answer that cannot be read.';
-  return new ProblemError(response.status, isText(code) ? code : 'unknown', words, fieldsOf(errors));
+  return new ProblemError(status, isText(code) ? code : 'unknown', words, fieldsOf(errors));
 }
 
 /** The request may or may not have been carried out, so the same one is sent again. */

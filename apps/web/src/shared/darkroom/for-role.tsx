@@ -21,7 +21,7 @@ function NotAllowed({ least, what }: Omit<Props, 'children'>) {
   const { address } = useDarkroom();
   const { data } = useQuery(peopleQuery(address));
   const names = (data ?? [])
-    .filter((person) => !person.leftAt && atLeast(person.role, least))
+    .filter((person) => atLeast(person.role, least))
     .map((person) => person.displayName);
   return (
     <>

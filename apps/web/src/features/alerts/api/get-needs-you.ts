@@ -1,13 +1,13 @@
 import { queryOptions, useQuery } from '@tanstack/react-query';
-import { get, inDarkroom } from '../../../shared/api/client.js';
+import { answered, api } from '../../../shared/api/client.js';
 import { keptKey } from '../../../shared/api/query-keys.js';
-import type { NeedsYouRow } from '../../../shared/api/types.js';
 import { useDarkroom } from '../../../shared/darkroom/darkroom-context.js';
 
 export const needsYouQuery = (darkroom: string) =>
   queryOptions({
     queryKey: keptKey(darkroom, 'needs-you'),
-    queryFn: () => get<{ open: NeedsYouRow[] }>(inDarkroom(darkroom, '/needs-you')),
+    queryFn: () =>
+      answered(api.GET('/darkrooms/{darkroomId}/needs-you', { params: { path: { darkroomId: darkroom } } })),
   });
 
 /** Asked only where the role may see it. */

@@ -1,12 +1,11 @@
 import { useAction } from '../../../shared/actions/use-action.js';
-import type { ActionAnswer } from '../../../shared/api/types.js';
-
-export interface DecisionContent {
-  loadActionId: string;
-  decision: 'accept';
-  reason: string;
-}
+import { answered, api } from '../../../shared/api/client.js';
+import type { ActionAnswer, DecisionContent } from '../../../shared/api/types.js';
 
 /** Lets a reported load stand, with a reason. It changes no count. A technician's. */
 export const usePutDecision = () =>
-  useAction<DecisionContent, ActionAnswer>({ plural: 'decisions', touches: ['needs-you', 'log', 'bottle'] });
+  useAction<DecisionContent, ActionAnswer>({
+    put: (path, body) =>
+      answered(api.PUT('/darkrooms/{darkroomId}/decisions/{actionId}', { params: { path }, body })),
+    touches: ['needs-you', 'log', 'bottle'],
+  });

@@ -1,13 +1,15 @@
 import { queryOptions, useQuery } from '@tanstack/react-query';
-import { get, inDarkroom } from '../../../shared/api/client.js';
+import { answered, api } from '../../../shared/api/client.js';
 import { keptKey } from '../../../shared/api/query-keys.js';
-import type { ChemistryView } from '../../../shared/api/types.js';
 import { useDarkroom } from '../../../shared/darkroom/darkroom-context.js';
 
 export const chemistriesQuery = (darkroom: string) =>
   queryOptions({
     queryKey: keptKey(darkroom, 'chemistries'),
-    queryFn: () => get<{ chemistries: ChemistryView[] }>(inDarkroom(darkroom, '/chemistries')),
+    queryFn: () =>
+      answered(
+        api.GET('/darkrooms/{darkroomId}/chemistries', { params: { path: { darkroomId: darkroom } } }),
+      ),
   });
 
 export const useChemistries = () => useQuery(chemistriesQuery(useDarkroom().address));

@@ -3,6 +3,7 @@ import type { ChemistryDocument } from '@wetside/chemistry';
 import type { BottleChange } from '../../../shared/actions/pending.store.js';
 import { settleBottles } from '../../../shared/actions/settle-bottles.js';
 import { useAction } from '../../../shared/actions/use-action.js';
+import { answered, api } from '../../../shared/api/client.js';
 import type { LoadAnswer, LoadContent } from '../../../shared/api/types.js';
 
 /** What a load does to its bottles, by the same rule as the server's. */
@@ -20,7 +21,8 @@ function changesOf(
 
 export const usePutLoad = (documentOf: (bottleId: string) => ChemistryDocument | undefined) =>
   useAction<LoadContent, LoadAnswer>({
-    plural: 'loads',
+    put: (path, body) =>
+      answered(api.PUT('/darkrooms/{darkroomId}/loads/{actionId}', { params: { path }, body })),
     changes: (content) => changesOf(content, documentOf),
     settle: (client, darkroom, { bottles }) => settleBottles(client, darkroom, bottles),
     touches: ['bottles', 'bottle', 'log', 'needs-you'],

@@ -5,7 +5,7 @@ import type { Standing } from '../../bottles/standing.js';
 interface Props {
   baths: readonly Standing[];
   isIn: (standing: Standing) => boolean;
-  onToggle: (bottleId: string) => void;
+  onToggle: (bath: Standing) => void;
 }
 
 const Chip = chakra('button', {
@@ -20,7 +20,7 @@ const Chip = chakra('button', {
   },
 });
 
-/** The baths of the load; a tap leaves one out. */
+/** The baths of the load; a tap leaves one out, or takes one in instead of another of its role. */
 export function BathChips({ baths, isIn, onToggle }: Props) {
   return (
     <Flex role="group" aria-label="Through" wrap="wrap" gap="2">
@@ -30,7 +30,7 @@ export function BathChips({ baths, isIn, onToggle }: Props) {
           type="button"
           aria-pressed={isIn(bath)}
           aria-label={`${bath.bottle.code} ${bath.bottle.name}`}
-          onClick={() => onToggle(bath.bottle.id)}
+          onClick={() => onToggle(bath)}
         >
           <Tape>{bath.bottle.code}</Tape>
         </Chip>

@@ -25,8 +25,9 @@ interface Props {
 /** What film it is: its format and its class. */
 export function FilmChoice({ film, onChange }: Props) {
   const size = (key: 'widthMm' | 'heightMm', text: string): void => {
-    const mm = Number(text);
-    onChange({ ...film, [key]: mm > 0 ? Math.round(mm * 10) / 10 : undefined });
+    // Whole millimetres are recorded, and a part of one counts as one: film is never counted short.
+    const mm = Math.ceil(Number(text));
+    onChange({ ...film, [key]: mm > 0 ? mm : undefined });
   };
   return (
     <>

@@ -31,7 +31,8 @@ export function LoadForm({ load, baths, onDone, confirmRef }: Props) {
   const putLoad = usePutLoad((id) => baths.find(({ bottle }) => bottle.id === id)?.document);
   const confirmed = useRef(false);
   const { film } = choice;
-  const plan = planLoad({ baths, ...choice });
+  const plan = planLoad({ baths, film, picks: choice.picks });
+  const isIn = (bath: Standing): boolean => plan.through.includes(bath);
   const [only] = baths;
 
   const confirm = (event: FormEvent): void => {
@@ -60,7 +61,7 @@ export function LoadForm({ load, baths, onDone, confirmRef }: Props) {
     <form onSubmit={confirm} onKeyDown={typeDigit}>
       <Stack gap="3">
         {load.bottleIds.length > 1 ? (
-          <BathChips baths={baths} isIn={(bath) => choice.isIn(bath)} onToggle={choice.toggle} />
+          <BathChips baths={baths} isIn={isIn} onToggle={(bath) => choice.toggle(bath, isIn(bath))} />
         ) : (
           only && (
             <TextLink to={paths.bottle(address, only.bottle.code)}>All about {only.bottle.code}</TextLink>

@@ -7,7 +7,7 @@ interface Props {
   plan: LoadPlan;
   /** The sheet is of several baths, so that one of them can be left out. */
   several: boolean;
-  onReport: (bottleId: string) => void;
+  onReport: (bath: Standing) => void;
 }
 
 function ClosedBath({ bath, onReport }: { bath: Standing; onReport: () => void }) {
@@ -34,9 +34,12 @@ export function LoadPreview({ plan, several, onReport }: Props) {
           <span>{over.words}</span>
         </Flex>
       ))}
+      {plan.instead.map((words) => (
+        <Box key={words}>{words}</Box>
+      ))}
       {plan.leaves && <Box fontWeight="600">{plan.leaves}</Box>}
       {plan.closed.map((bath) => (
-        <ClosedBath key={bath.bottle.id} bath={bath} onReport={() => onReport(bath.bottle.id)} />
+        <ClosedBath key={bath.bottle.id} bath={bath} onReport={() => onReport(bath)} />
       ))}
       {plan.blocking.length > 0 && (
         <Box>

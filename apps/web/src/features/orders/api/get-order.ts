@@ -1,13 +1,17 @@
 import { queryOptions, useQuery } from '@tanstack/react-query';
-import { get, inDarkroom } from '../../../shared/api/client.js';
+import { answered, api } from '../../../shared/api/client.js';
 import { keptKey } from '../../../shared/api/query-keys.js';
-import type { OrderPageData } from '../../../shared/api/types.js';
 import { useDarkroom } from '../../../shared/darkroom/darkroom-context.js';
 
 export const orderQuery = (darkroom: string, id: string) =>
   queryOptions({
     queryKey: keptKey(darkroom, 'order', id),
-    queryFn: () => get<OrderPageData>(inDarkroom(darkroom, `/orders/${encodeURIComponent(id)}`)),
+    queryFn: () =>
+      answered(
+        api.GET('/darkrooms/{darkroomId}/orders/{orderId}', {
+          params: { path: { darkroomId: darkroom, orderId: id } },
+        }),
+      ),
   });
 
 export const useOrder = (id: string) => useQuery(orderQuery(useDarkroom().address, id));

@@ -1,15 +1,11 @@
 import { useAction } from '../../../shared/actions/use-action.js';
-import type { OrderAnswer } from '../../../shared/api/types.js';
-
-export interface DraftContent {
-  orderId: string;
-  supplierId: string;
-  lines: { id: string; supplierPackId: string; count: number }[];
-}
+import { answered, api } from '../../../shared/api/client.js';
+import type { OrderAnswer, OrderDraftContent } from '../../../shared/api/types.js';
 
 /** Begins an order at a supplier. A technician's. */
 export const usePutOrderDraft = () =>
-  useAction<DraftContent, OrderAnswer>({
-    plural: 'order-drafts',
+  useAction<OrderDraftContent, OrderAnswer>({
+    put: (path, body) =>
+      answered(api.PUT('/darkrooms/{darkroomId}/order-drafts/{actionId}', { params: { path }, body })),
     touches: ['orders', 'shelf', 'needs-you', 'log'],
   });

@@ -1,12 +1,12 @@
 import { queryOptions, useQuery } from '@tanstack/react-query';
-import { get } from '../../../shared/api/client.js';
+import { answered, api } from '../../../shared/api/client.js';
 import { ProblemError } from '../../../shared/api/problem.js';
 import { meKey } from '../../../shared/api/query-keys.js';
 import type { Me } from '../../../shared/api/types.js';
 
 async function fetchMe(): Promise<Me | null> {
   try {
-    return await get<Me>('/me');
+    return await answered(api.GET('/me'));
   } catch (error) {
     if (error instanceof ProblemError && error.status === 401) return null;
     throw error;

@@ -1,5 +1,5 @@
 import { useMutation, useQueryClient } from '@tanstack/react-query';
-import { request } from '../../../shared/api/client.js';
+import { answered, api } from '../../../shared/api/client.js';
 import { clearStrip } from '../../../shared/actions/strip.store.js';
 import { meKey } from '../../../shared/api/query-keys.js';
 
@@ -7,7 +7,7 @@ import { meKey } from '../../../shared/api/query-keys.js';
 export function usePostSignOut() {
   const client = useQueryClient();
   return useMutation({
-    mutationFn: () => request<void>('POST', '/sign-out'),
+    mutationFn: () => answered(api.POST('/sign-out')),
     onSuccess: () => {
       clearStrip();
       client.clear();

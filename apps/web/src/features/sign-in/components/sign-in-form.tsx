@@ -1,16 +1,17 @@
 import { Button, Stack } from '@chakra-ui/react';
 import { useForm } from 'react-hook-form';
+import type { SignInRequest } from '../../../shared/api/types.js';
 import { FormError } from '../../../shared/ui/form-error.js';
 import { showProblem } from '../../../shared/ui/form-problem.js';
 import { TextField } from '../../../shared/ui/text-field.js';
-import { type Credentials, usePostSignIn } from '../api/post-sign-in.js';
+import { usePostSignIn } from '../api/post-sign-in.js';
 
-const fieldOf = (field: string): keyof Credentials | null =>
+const fieldOf = (field: string): keyof SignInRequest | null =>
   field === 'email' || field === 'passphrase' ? field : null;
 
 export function SignInForm() {
   const signIn = usePostSignIn();
-  const { register, handleSubmit, setError, formState } = useForm<Credentials>({
+  const { register, handleSubmit, setError, formState } = useForm<SignInRequest>({
     defaultValues: { email: '', passphrase: '' },
   });
   const submit = handleSubmit(async (credentials) => {

@@ -1,15 +1,11 @@
 import { useAction } from '../../../shared/actions/use-action.js';
-import type { ActionAnswer } from '../../../shared/api/types.js';
-
-export interface SettingChangeContent {
-  subject: 'supplier-pack';
-  subjectId: string;
-  changes: { field: 'outUntil'; value: string | null }[];
-}
+import { answered, api } from '../../../shared/api/client.js';
+import type { ActionAnswer, SettingChangeContent } from '../../../shared/api/types.js';
 
 /** Notes that a supplier is out of a pack until a date, or has it again. A technician's. */
 export const usePutSettingChange = () =>
   useAction<SettingChangeContent, ActionAnswer>({
-    plural: 'setting-changes',
+    put: (path, body) =>
+      answered(api.PUT('/darkrooms/{darkroomId}/setting-changes/{actionId}', { params: { path }, body })),
     touches: ['suppliers', 'shelf', 'needs-you', 'log'],
   });

@@ -1,0 +1,29 @@
+import { roundLeftDown } from '@wetside/chemistry';
+import type { FilmLine } from '../../shared/api/types.js';
+import { countOf } from '../../shared/formats/amounts.js';
+import { stateWord } from '../../shared/ui/state-mark.js';
+import { isEssential } from '../bottles/line-order.js';
+import type { Standing } from '../bottles/standing.js';
+import { isOpen, nextAfter, oneOfEachRole } from './one-a-role.js';
+
+/** The load that the next bottles are reckoned for: whoever comes to the sink puts through a roll at least. */
+const oneRoll: FilmLine = { format: '135-36', count: 1, filmClass: 'conventional' };
+
+/** '13 rolls more. FX-01 gives out first. Then FX-02.', or 'Not today. FX-01 is past its date.' */
+export function verdictWords(baths: readonly Standing[]): string | null {
+  const open = baths.filter(isOpen);
+  const roles = new Set(open.map(({ bottle }) => bottle.role));
+  const stops = baths.find(({ bottle }) => isEssential(bottle.role) && !roles.has(bottle.role));
+  if (stops) return `Not today. ${stops.bottle.code} is ${stateWord(stops.assessment.verdict)}.`;
+  const used = oneOfEachRole(open, oneRoll);
+  const needed = used.filter(({ document }) => !document.cheapToRenew);
+  const known = (needed.length > 0 ? needed : used).flatMap((standing) => {
+    const leftE4 = standing.assessment.leftE4.film;
+    return typeof leftE4 === 'number' ? [{ standing, leftE4 }] : [];
+  });
+  const [least] = known.sort((a, b) => a.leftE4 - b.leftE4);
+  if (!least) return null;
+  const next = nextAfter(least.standing, open, oneRoll);
+  const words = `${countOf(roundLeftDown(least.leftE4), 'roll')} more. ${least.standing.bottle.code} gives out first.`;
+  return next ? `${words} Then ${next.bottle.code}.` : words;
+}
