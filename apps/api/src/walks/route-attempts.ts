@@ -124,6 +124,7 @@ const looks: Attempts = {
 
 const doors: Attempts = {
   'GET /health': () => ({ url: '/api/health', names: false }),
+  'GET /ready': () => ({ url: '/api/ready', names: false }),
   'GET /me': () => ({ url: '/api/me', names: false }),
   'POST /sign-in': async (h) => ({
     ...(await spending(h, '/api/sign-in')),

@@ -15,6 +15,9 @@ export function createQueryClient(): QueryClient {
     defaultOptions: {
       queries: {
         staleTime: 20_000,
+        // Others work at the same baths: what is shown is asked for again each minute and when the page is looked at.
+        refetchInterval: 60_000,
+        refetchOnWindowFocus: 'always',
         retry: (failures, error) => error instanceof NetworkError && failures < 2,
         retryDelay: (failures) => Math.min(500 * 2 ** failures, 4_000),
       },

@@ -4,7 +4,7 @@ import { getTableConfig, PgTable } from 'drizzle-orm/pg-core';
 import type { Tx } from '../database/database.js';
 
 /** Every column that this program was built to use, as schema.table.column. */
-const built = Object.values(schema)
+const built = (Object.values(schema) as unknown[])
   .filter((exported): exported is PgTable => is(exported, PgTable))
   .flatMap((table) => {
     const { schema: home = 'public', name, columns } = getTableConfig(table);
