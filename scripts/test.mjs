@@ -1,6 +1,7 @@
 // npm test: runs every part whatever the others did, and ends with the count alone on the last line.
 // `npm test -- web pure` runs those parts alone.
 import { mkdirSync, rmSync } from 'node:fs';
+import { availableParallelism } from 'node:os';
 import { performance } from 'node:perf_hooks';
 import { build } from './lib/build.mjs';
 import { checkCount, jestCount, playwrightCount } from './lib/counts.mjs';
@@ -39,7 +40,18 @@ const withBuild = () => (built ??= build());
 /** @param {string} project @param {NodeJS.ProcessEnv} jestEnv */
 async function jest(project, jestEnv) {
   const file = `${results}/${project}.json`;
-  const args = ['-c', 'jest.config.mjs', '--selectProjects', project, '--json', '--outputFile', file];
+  // Jest leaves a core for whoever watches; here nobody does.
+  const workers = `--maxWorkers=${availableParallelism()}`;
+  const args = [
+    '-c',
+    'jest.config.mjs',
+    workers,
+    '--selectProjects',
+    project,
+    '--json',
+    '--outputFile',
+    file,
+  ];
   return jestCount(file, await runQuietly([bin('jest'), ...args], jestEnv));
 }
 
@@ -91,6 +103,10 @@ const parts = {
   },
 };
 
+/** Parts of one group run at once: each of these two keeps one core busy. */
+const together = [['lint', 'types'], ['pure'], ['postgresql'], ['web'], ['browser']];
+const notThere = () => Promise.reject(new Trouble('There is no such part.'));
+
 /** @param {string} name @param {() => Promise<Count>} work @returns {Promise<Count>} */
 async function runPart(name, work) {
   const began = performance.now();
@@ -124,12 +140,14 @@ async function main() {
   const total = { passed: 0, failed: 0 };
   /** @type {string[]} */
   const red = [];
-  for (const [name, work] of Object.entries(parts)) {
-    if (wanted.length > 0 && !wanted.includes(name)) continue;
-    const count = await runPart(name, work);
-    total.passed += count.passed;
-    total.failed += count.failed;
-    if (count.failed > 0) red.push(name);
+  for (const group of together) {
+    const names = group.filter((name) => wanted.length === 0 || wanted.includes(name));
+    const counts = await Promise.all(names.map((name) => runPart(name, parts[name] ?? notThere)));
+    counts.forEach((count, index) => {
+      total.passed += count.passed;
+      total.failed += count.failed;
+      if (count.failed > 0) red.push(names[index] ?? '');
+    });
   }
   if (database && cluster.startedHere) await cluster.stop();
   if (red.length > 0) say(`\nFailed: ${red.join(', ')}. The reports are in ${results}.`);
