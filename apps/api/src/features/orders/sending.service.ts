@@ -96,7 +96,10 @@ export class SendingService implements OnModuleInit {
         revision: order.revision + 1,
       });
       await this.settle(tx, recording, whole, 'retraction');
-      if (order.state === 'sent') {
+      const unheard =
+        order.state === 'sent' &&
+        (await this.outgoing.withdrawUntried(tx, darkroomId, `order:${id}`, 'the order was cancelled'));
+      if (order.state === 'sent' && !unheard) {
         await this.mail(tx, recording, whole, 'order-cancelled', (mail) => cancelMail(mail, reason));
       }
     });

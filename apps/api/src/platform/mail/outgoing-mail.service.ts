@@ -1,5 +1,6 @@
 import { Injectable } from '@nestjs/common';
 import { mails } from '@wetside/db';
+import { and, eq } from 'drizzle-orm';
 import { v7 } from 'uuid';
 import { Environment } from '../../config/environment.js';
 import { Clock } from '../clock/clock.js';
@@ -51,6 +52,26 @@ export class OutgoingMail {
       });
     await this.remind(tx, added);
     return new Map(added.map(({ dedupeKey, id }) => [dedupeKey, id]));
+  }
+
+  /**
+   * Takes back a mail that nobody has tried to send yet. One that was tried may have arrived, whatever was answered.
+   * @returns whether it was taken back
+   */
+  async withdrawUntried(tx: Tx, darkroomId: string, dedupeKey: string, because: string): Promise<boolean> {
+    const taken = await tx
+      .update(mails)
+      .set({ state: 'withdrawn', withdrawnBecause: because })
+      .where(
+        and(
+          eq(mails.darkroomId, darkroomId),
+          eq(mails.dedupeKey, dedupeKey),
+          eq(mails.state, 'waiting'),
+          eq(mails.attempts, 0),
+        ),
+      )
+      .returning({ id: mails.id });
+    return taken.length > 0;
   }
 
   /** Puts mails that wait into the queue, each to be looked at when it is due. */
