@@ -2,7 +2,8 @@ import { assess } from './assess.js';
 import { type Assessment, defaultThresholds } from './assess-types.js';
 import { rapidFixer, stopBathSb5, wettingAgent } from './catalogue/starter-catalogue.js';
 import type { ChemistryDocument } from './document.js';
-import { type BottleFact, fold } from './ledger.js';
+import { fold } from './fold.js';
+import type { BottleFact } from './ledger.js';
 import { freshLitre, litreBottle, rolls, story } from './testing/bottle-story.js';
 
 function stands(

@@ -2,7 +2,8 @@ import { starterCatalogue } from './catalogue/starter-catalogue.js';
 import type { ChemistryDocument } from './document.js';
 import { applyDetail } from './fold-details.js';
 import { openBottle } from './fold-opening.js';
-import { apply, type BottleFact, type BottleTotals, fold, isNewest, LedgerOrderError } from './ledger.js';
+import { apply, fold, isNewest } from './fold.js';
+import { type BottleFact, type BottleTotals, LedgerOrderError } from './ledger.js';
 import { factsOf, generateHistory, type History } from './testing/histories.js';
 
 const seeds = Array.from({ length: 25 }, (_, index) => index + 1);

@@ -9,6 +9,7 @@ export * from './document.js';
 export * from './document-parse.js';
 export * from './document-schema.js';
 export * from './film.js';
+export { apply, fold, isNewest } from './fold.js';
 export { fromText, toText } from './fraction.js';
 export type { Fraction, FractionText } from './fraction.js';
 export * from './keeping.js';

@@ -2,7 +2,8 @@ import { rapidFixer } from './catalogue/starter-catalogue.js';
 import { chargeFor, flagsFor } from './charge.js';
 import type { ChemistryDocument } from './document.js';
 import { lastDay } from './keeping.js';
-import { apply, type BottleFact, type BottleTotals, fold, LedgerOrderError } from './ledger.js';
+import { apply, fold } from './fold.js';
+import { type BottleFact, type BottleTotals, LedgerOrderError } from './ledger.js';
 import { freshLitre, litreBottle, rolls, story } from './testing/bottle-story.js';
 
 function totalsOf(facts: BottleFact[], document: ChemistryDocument = rapidFixer): BottleTotals {

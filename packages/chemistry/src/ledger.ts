@@ -104,5 +104,3 @@ export interface BottleTotals {
 export class LedgerOrderError extends Error {
   override name = 'LedgerOrderError';
 }
-
-export { apply, fold, isNewest } from './fold.js';

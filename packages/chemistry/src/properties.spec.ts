@@ -6,7 +6,7 @@ import { chargeFor, type LoadFilm } from './charge.js';
 import { addDays, addMonths, daysBetween, localDate, startOfDay } from './dates.js';
 import { filmClasses, namedFormats } from './film.js';
 import { lastDay } from './keeping.js';
-import { fold } from './ledger.js';
+import { fold } from './fold.js';
 import { measureOut } from './mixing.js';
 import { factsOf, generateHistory } from './testing/histories.js';
 

@@ -3,7 +3,8 @@ import { defaultThresholds } from '../assess-types.js';
 import { starterCatalogue } from '../catalogue/starter-catalogue.js';
 import { localDate } from '../dates.js';
 import type { ChemistryDocument } from '../document.js';
-import { type BottleFact, type BottleTotals, fold } from '../ledger.js';
+import { fold } from '../fold.js';
+import type { BottleFact, BottleTotals } from '../ledger.js';
 import { measureOut } from '../mixing.js';
 
 /** The document of the starter catalogue with that key. Throws Error for a key that is none. */
