@@ -1,15 +1,6 @@
 import type { ChemistryDocument } from '@wetside/chemistry';
 import { sql } from 'drizzle-orm';
-import {
-  check,
-  foreignKey,
-  integer,
-  jsonb,
-  pgTable,
-  primaryKey,
-  unique,
-  uuid,
-} from 'drizzle-orm/pg-core';
+import { check, foreignKey, integer, jsonb, pgTable, primaryKey, unique, uuid } from 'drizzle-orm/pg-core';
 import { darkroomId, instant, ownDarkroomOnly } from './columns.js';
 import { memberships } from './people.js';
 

@@ -7,6 +7,9 @@ import { darkroomId, microlitres, oneOf, ownDarkroomOnly, tenThousandths } from 
 import { lineVersions } from './lines.js';
 import { guests, memberships } from './people.js';
 
+export const loadFlags = ['time_unsure', 'late', 'reported'] as const;
+export type LoadFlag = (typeof loadFlags)[number];
+
 /** What went through a bottle or a line in one go. */
 export const loads = pgTable(
   'loads',
@@ -14,8 +17,8 @@ export const loads = pgTable(
     darkroomId: darkroomId(),
     actionId: uuid('action_id').notNull(),
     lineVersionId: uuid('line_version_id'),
-    /** time_unsure, late: about the load as a whole. */
-    flags: text('flags').array().$type<('time_unsure' | 'late')[]>().notNull(),
+    /** About the load as a whole: its time is unsure, it was told late, the person said that it had happened already. */
+    flags: text('flags').array().$type<LoadFlag[]>().notNull(),
     note: text('note'),
   },
   (t) => [
@@ -30,7 +33,10 @@ export const loads = pgTable(
       columns: [t.darkroomId, t.lineVersionId],
       foreignColumns: [lineVersions.darkroomId, lineVersions.id],
     }),
-    check('loads_flags', sql`${t.flags} <@ array['time_unsure', 'late']::text[]`),
+    check(
+      'loads_flags',
+      sql.raw(`flags <@ array[${loadFlags.map((flag) => `'${flag}'`).join(', ')}]::text[]`),
+    ),
     ownDarkroomOnly('loads'),
   ],
 );
@@ -153,6 +159,7 @@ export const decisions = pgTable(
       foreignColumns: [loads.darkroomId, loads.actionId],
     }),
     check('decisions_decision', oneOf('decision', ['accept'])),
+    index('decisions_by_load').on(t.darkroomId, t.loadActionId),
     ownDarkroomOnly('decisions'),
   ],
 );

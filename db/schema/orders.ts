@@ -100,6 +100,7 @@ export const orderLines = pgTable(
       'order_lines_counts',
       sql`${t.count} >= 0 and ${t.received} >= 0 and ${t.cancelled} >= 0 and ${t.priceMinor} >= 0`,
     ),
+    index('order_lines_by_supplier_pack').on(t.darkroomId, t.supplierPackId),
     ownDarkroomOnly('order_lines'),
   ],
 );

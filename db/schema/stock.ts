@@ -165,6 +165,7 @@ export const supplierPacks = pgTable(
       foreignColumns: [packs.darkroomId, packs.id],
     }),
     check('supplier_packs_price', sql`${t.priceMinor} >= 0`),
+    index('supplier_packs_by_pack').on(t.darkroomId, t.packId),
     ownDarkroomOnly('supplier_packs'),
   ],
 );

@@ -134,6 +134,7 @@ export const mails = pgTable(
       'mails_lease',
       sql`(${t.state} = 'leased') = (${t.leaseUntil} is not null and ${t.leaseId} is not null)`,
     ),
+    index('mails_by_order').on(t.darkroomId, t.orderId),
     ownDarkroomOnly('mails'),
   ],
 );

@@ -926,7 +926,7 @@ export interface components {
             flags: string[];
         };
         LoadView: {
-            flags: string[];
+            flags: ("time_unsure" | "late" | "reported")[];
             note: string | null;
             film: components["schemas"]["LoadFilmView"][];
             steps: components["schemas"]["LoadStepView"][];

@@ -120,6 +120,7 @@ const ledger: readonly RepositoryCalls[] = [
       takeDue: (i) => [{ darkroomId: i.darkroomId, mailId: i.waitingMailId }, AT],
       waitsUntil: (i) => [{ darkroomId: i.darkroomId, mailId: i.waitingMailId }],
       whyNot: (i) => [{ darkroomId: i.darkroomId, mailId: i.waitingMailId }],
+      orderState: (i) => [{ darkroomId: i.darkroomId, mailId: i.leasedMailId }],
       withdraw: (i) => [{ darkroomId: i.darkroomId, mailId: i.waitingMailId }, 'the condition had ended'],
       lease: (i) => [
         { darkroomId: i.darkroomId, mailId: i.waitingMailId },

@@ -8,6 +8,7 @@ import {
   type Material,
   type StepFlag,
 } from '@wetside/chemistry';
+import { loadFlags, type LoadFlag } from '@wetside/db';
 import { BottleView } from '../bottles/bottle.view.js';
 import { ActionView } from '../../platform/ledger/action.view.js';
 
@@ -55,8 +56,8 @@ export class LoadStepView {
 }
 
 export class LoadView {
-  @ApiProperty({ type: String, isArray: true })
-  flags: ('time_unsure' | 'late')[];
+  @ApiProperty({ enum: loadFlags, isArray: true })
+  flags: LoadFlag[];
 
   @ApiProperty({ type: String, nullable: true })
   note: string | null;

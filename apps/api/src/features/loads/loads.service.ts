@@ -59,7 +59,7 @@ export class LoadsService implements OnModuleInit {
     const film = checkedFilm(content.film);
     const locked = await this.ledger.lock(tx, recording.darkroomId, content.bottleIds);
     refuseTakenBack(locked);
-    const flags = placeInTime(recording, locked);
+    const flags = placeInTime(recording, locked, content.reported ?? false);
     await recording.add(tx);
     const steps = locked.map((bottle): ChargedStep => {
       const charge = chargeOf(bottle, film, content.material);

@@ -5,7 +5,7 @@ import type { Tx } from '../../platform/database/database.js';
 import { invalid } from '../../platform/errors/problem.js';
 import { ActionViews } from '../../platform/ledger/action-views.js';
 import { LogRepository, type Place } from './log.repository.js';
-import { tellers, type Said } from './log-sentences.js';
+import { tellAll } from './log-sentences.js';
 import type { LogAnswer, LogEntryView } from './log.view.js';
 
 interface Listed {
@@ -45,22 +45,12 @@ export class LogEntries {
       me,
       listed.map((one) => one.id),
     );
-    const told = await this.tell(tx, me.darkroomId, listed);
+    const told = await tellAll(this.repository, tx, me.darkroomId, listed);
     return listed.flatMap(({ id }) => {
       const action = views.get(id);
       const words = told.get(id);
       return action && words ? [{ action, ...words }] : [];
     });
-  }
-
-  private async tell(tx: Tx, darkroomId: string, listed: readonly Listed[]): Promise<Map<string, Said>> {
-    const told = new Map<string, Said>();
-    const by = tellers(this.repository);
-    for (const kind of new Set(listed.map((one) => one.kind))) {
-      const ids = listed.filter((one) => one.kind === kind).map((one) => one.id);
-      for (const [id, said] of await by[kind](tx, darkroomId, ids)) told.set(id, said);
-    }
-    return told;
   }
 }
 

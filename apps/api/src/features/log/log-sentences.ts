@@ -1,7 +1,7 @@
 import type { ActionKind } from '@wetside/db';
 import type { Tx } from '../../platform/database/database.js';
 import type { LogRepository } from './log.repository.js';
-import { classWord, filmWords, volumeWords } from './log-words.js';
+import { classWord, filmWords, inTheOrderOfALine, volumeWords } from './log-words.js';
 
 /** What the log says of one action. */
 export interface Said {
@@ -22,7 +22,7 @@ const byAction = <T extends { actionId: string }>(rows: T[], tell: (row: T) => S
   new Map(rows.map((row) => [row.actionId, tell(row)]));
 
 /** How each kind of action is told; a kind without a teller does not compile. */
-export function tellers(repository: LogRepository): Record<ActionKind, Describe> {
+function tellers(repository: LogRepository): Record<ActionKind, Describe> {
   const holds: Describe = async (tx, darkroomId, ids) =>
     byAction(await repository.holds(tx, darkroomId, ids), (row) =>
       said(row.change === 'hold' ? `put on hold: ${row.reason}` : `released: ${row.reason}`, [row.code]),
@@ -53,12 +53,41 @@ export function tellers(repository: LogRepository): Record<ActionKind, Describe>
     'order-draft': orders,
     'order-send': orders,
     'order-cancel': orders,
-    void: async (tx, darkroomId, ids) =>
-      byAction(await repository.voids(tx, darkroomId, ids), (row) => ({
-        ...said(row.reason ? `took it back: ${row.reason}` : 'took it back'),
-        voidsActionId: row.voidedActionId,
-      })),
+    void: (tx, darkroomId, ids) => tellVoids(repository, tx, darkroomId, ids),
   };
+}
+
+/** What is said of these actions, kind by kind. */
+export async function tellAll(
+  repository: LogRepository,
+  tx: Tx,
+  darkroomId: string,
+  listed: readonly { id: string; kind: ActionKind }[],
+): Promise<Map<string, Said>> {
+  const told = new Map<string, Said>();
+  const by = tellers(repository);
+  for (const kind of new Set(listed.map((one) => one.kind))) {
+    const ids = listed.filter((one) => one.kind === kind).map((one) => one.id);
+    for (const [id, one] of await by[kind](tx, darkroomId, ids)) told.set(id, one);
+  }
+  return told;
+}
+
+/** A void says what it took back; what it took back is never a void. */
+async function tellVoids(
+  repository: LogRepository,
+  tx: Tx,
+  darkroomId: string,
+  ids: string[],
+): Promise<Map<string, Said>> {
+  const rows = await repository.voids(tx, darkroomId, ids);
+  const targets = rows.map(({ voidedActionId: id, voidedKind: kind }) => ({ id, kind }));
+  const told = await tellAll(repository, tx, darkroomId, targets);
+  return byAction(rows, ({ voidedActionId, reason }) => {
+    const target = told.get(voidedActionId);
+    const what = target ? `took back: ${target.sentence}` : 'took it back';
+    return { ...said(reason ? `${what} (${reason})` : what, target?.codes), voidsActionId: voidedActionId };
+  });
 }
 
 const settingWords: Record<string, string> = { outUntil: '“out until”' };
@@ -95,6 +124,7 @@ async function tellLoads(
     const load = told.get(step.actionId);
     if (!load) continue;
     load.codes.push(step.code);
+    load.codes.sort(inTheOrderOfALine);
     for (const flag of step.flags) if (!load.flags.includes(flag)) load.flags.push(flag);
   }
   return told;

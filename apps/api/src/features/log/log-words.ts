@@ -1,4 +1,4 @@
-import type { FilmClass } from '@wetside/chemistry';
+import { roleLetters, roles, type FilmClass } from '@wetside/chemistry';
 
 const plural = (count: number, one: string, many = `${one}s`): string =>
   `${count} ${count === 1 ? one : many}`;
@@ -39,3 +39,10 @@ export function volumeWords(ul: number): string {
     ? `${Number((ul / 1_000_000).toFixed(2))} L`
     : `${Number((ul / 1000).toFixed(1))} mL`;
 }
+
+const letters = roles.map((role) => roleLetters[role]);
+const placeOf = (code: string): number => letters.indexOf(code.slice(0, 2));
+
+/** Bottles as a film meets them: developer first, wetting agent last. */
+export const inTheOrderOfALine = (a: string, b: string): number =>
+  placeOf(a) - placeOf(b) || a.localeCompare(b);

@@ -244,8 +244,14 @@ export class LogRepository {
 
   async voids(tx: Tx, darkroomId: string, ids: string[]) {
     return tx
-      .select({ actionId: voids.actionId, voidedActionId: voids.voidedActionId, reason: voids.reason })
+      .select({
+        actionId: voids.actionId,
+        voidedActionId: voids.voidedActionId,
+        voidedKind: actions.kind,
+        reason: voids.reason,
+      })
       .from(voids)
+      .innerJoin(actions, and(eq(actions.darkroomId, voids.darkroomId), eq(actions.id, voids.voidedActionId)))
       .where(and(eq(voids.darkroomId, darkroomId), inArray(voids.actionId, ids)));
   }
 }

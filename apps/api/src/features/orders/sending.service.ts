@@ -96,10 +96,8 @@ export class SendingService implements OnModuleInit {
         revision: order.revision + 1,
       });
       await this.settle(tx, recording, whole, 'retraction');
-      const unheard =
-        order.state === 'sent' &&
-        (await this.outgoing.withdrawUntried(tx, darkroomId, `order:${id}`, 'the order was cancelled'));
-      if (order.state === 'sent' && !unheard) {
+      const waited = await this.outgoing.withdraw(tx, darkroomId, `order:${id}`, 'the order was cancelled');
+      if (order.state === 'sent' && waited !== 'unheard') {
         await this.mail(tx, recording, whole, 'order-cancelled', (mail) => cancelMail(mail, reason));
       }
     });

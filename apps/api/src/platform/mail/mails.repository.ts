@@ -1,5 +1,5 @@
 import { Injectable } from '@nestjs/common';
-import { events, mails, memberships, notices } from '@wetside/db';
+import { events, mails, memberships, notices, orders } from '@wetside/db';
 import { and, eq, isNull, lte, or, sql } from 'drizzle-orm';
 import type { Tx } from '../database/database.js';
 
@@ -55,6 +55,16 @@ export class MailsRepository {
       .limit(1);
     if (!open) return 'the condition had ended';
     return open.leftAt === null ? null : 'its reader had left the darkroom';
+  }
+
+  /** How the order stands that the mail is about; null for a mail about none. */
+  async orderState(tx: Tx, key: MailKey): Promise<(typeof orders.$inferSelect)['state'] | null> {
+    const [row] = await tx
+      .select({ state: orders.state })
+      .from(mails)
+      .innerJoin(orders, and(eq(orders.darkroomId, mails.darkroomId), eq(orders.id, mails.orderId)))
+      .where(isIt(key));
+    return row?.state ?? null;
   }
 
   async withdraw(tx: Tx, key: MailKey, because: string): Promise<void> {

@@ -55,23 +55,25 @@ export class OutgoingMail {
   }
 
   /**
-   * Takes back a mail that nobody has tried to send yet. One that was tried may have arrived, whatever was answered.
-   * @returns whether it was taken back
+   * Takes back a mail that still waits, if there is one.
+   * @returns 'unheard' when nobody had tried to send it; 'tried' when it may have arrived, whatever was answered; null
+   *   when none waited
    */
-  async withdrawUntried(tx: Tx, darkroomId: string, dedupeKey: string, because: string): Promise<boolean> {
-    const taken = await tx
+  async withdraw(
+    tx: Tx,
+    darkroomId: string,
+    dedupeKey: string,
+    because: string,
+  ): Promise<'unheard' | 'tried' | null> {
+    const [taken] = await tx
       .update(mails)
       .set({ state: 'withdrawn', withdrawnBecause: because })
       .where(
-        and(
-          eq(mails.darkroomId, darkroomId),
-          eq(mails.dedupeKey, dedupeKey),
-          eq(mails.state, 'waiting'),
-          eq(mails.attempts, 0),
-        ),
+        and(eq(mails.darkroomId, darkroomId), eq(mails.dedupeKey, dedupeKey), eq(mails.state, 'waiting')),
       )
-      .returning({ id: mails.id });
-    return taken.length > 0;
+      .returning({ attempts: mails.attempts });
+    if (!taken) return null;
+    return taken.attempts === 0 ? 'unheard' : 'tried';
   }
 
   /** Puts mails that wait into the queue, each to be looked at when it is due. */

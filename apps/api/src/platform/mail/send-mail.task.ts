@@ -1,7 +1,7 @@
 import { Injectable, Logger, type OnModuleInit } from '@nestjs/common';
 import { randomUUID } from 'node:crypto';
 import { Clock } from '../clock/clock.js';
-import { Database } from '../database/database.js';
+import { Database, type Tx } from '../database/database.js';
 import { JobTasks } from '../jobs/job-tasks.js';
 import { NextCheck } from '../jobs/next-check.js';
 import { waitAfter } from './back-off.js';
@@ -63,7 +63,7 @@ export class SendMailTask implements OnModuleInit {
         if (dueAt && dueAt > now) await this.outgoing.remind(tx, [{ ...key, id: key.mailId, dueAt }]);
         return null;
       }
-      const whyNot = row.kind === 'warning' ? await this.repository.whyNot(tx, key) : null;
+      const whyNot = await this.whyNot(tx, key, row);
       if (whyNot !== null) {
         await this.repository.withdraw(tx, key, whyNot);
         return null;
@@ -74,6 +74,13 @@ export class SendMailTask implements OnModuleInit {
       await this.nextCheck.lower(tx, key.darkroomId, leaseUntil);
       return { row, leaseId, attempts: row.attempts + 1 };
     });
+  }
+
+  /** A cancellation is never overtaken: its own kind always goes out. */
+  private async whyNot(tx: Tx, key: MailKey, row: MailRow): Promise<string | null> {
+    if (row.kind === 'warning') return this.repository.whyNot(tx, key);
+    const isCancelled = row.kind === 'order' && (await this.repository.orderState(tx, key)) === 'cancelled';
+    return isCancelled ? 'the order was cancelled' : null;
   }
 
   private async speak(row: MailRow): Promise<Outcome> {
