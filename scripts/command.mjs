@@ -1,28 +1,41 @@
-// npm run reconcile, demo:reset, darkroom:new: a command of the server's on npm start's database.
-// It works beside a running npm start, and without one: then the database runs for as long as the command.
+// npm run reconcile, demo:reset, darkroom:new: a command of the server's on npm start's database, or on that of real
+// use where WETSIDE_DATA is set. It works beside a running program, and without one: then the database runs for as
+// long as the command.
 import { existsSync } from 'node:fs';
 import { build } from './lib/build.mjs';
-import { Cluster } from './lib/database.mjs';
 import { at } from './lib/paths.mjs';
-import { demo, lastRun, saySignIns, serverSettings } from './lib/program.mjs';
+import { demo, saySignIns } from './lib/demo.mjs';
+import { lastRun, serverSettings } from './lib/program.mjs';
+import { refuseUnready } from './lib/real.mjs';
 import { run } from './lib/run.mjs';
 import { begin, say, step, Trouble } from './lib/say.mjs';
+import { store } from './lib/store.mjs';
 
 const [name = '', ...args] = process.argv.slice(2);
 
+/** @param {{ DATABASE_URL: string, DATABASE_JOBS_URL: string }} logins @returns {Record<string, string>} */
+function realSettings({ DATABASE_URL, DATABASE_JOBS_URL }) {
+  if (name !== 'reconcile') refuseUnready();
+  return { DATABASE_URL, DATABASE_JOBS_URL, MODE: 'real' };
+}
+
 await begin(async () => {
+  const { real, database, note } = store();
+  if (real && name === 'demo')
+    throw new Trouble('The demo is not for real use: take WETSIDE_DATA out of the environment first.');
   await build();
   const program = at('apps/api/dist/cli', `${name}.js`);
   if (!existsSync(program)) throw new Trouble(`There is no command ${name}.`);
-  const cluster = new Cluster('durable');
-  const logins = await step('Starting the database', () => cluster.start());
+  const logins = await step('Starting the database', () => database.start());
   try {
-    if (cluster.startedHere)
-      await step('Bringing the database to this version', () => cluster.migrate(logins));
+    if (database.startedHere)
+      await step('Bringing the database to this version', () => database.migrate(logins));
     const settings = {
-      ...serverSettings(logins, { port: 3000, origin: 'http://localhost:3000', smtpPort: 2525 }),
+      ...(real
+        ? realSettings(logins)
+        : serverSettings(logins, { port: 3000, origin: 'http://localhost:3000', smtpPort: 2525 })),
       // Links in mails must lead to the program that runs, if one does.
-      ...(cluster.startedHere ? {} : lastRun()?.settings),
+      ...(database.startedHere ? {} : lastRun(note)?.settings),
       DATABASE_ADMIN_URL: logins.DATABASE_ADMIN_URL,
     };
     if (name === 'demo') {
@@ -33,6 +46,6 @@ await begin(async () => {
     }
     return await run(process.execPath, [program, ...args], { env: { ...process.env, ...settings } });
   } finally {
-    if (cluster.startedHere) await cluster.stop();
+    if (database.startedHere) await database.stop();
   }
 });

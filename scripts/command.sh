@@ -3,5 +3,6 @@
 set -euo pipefail
 . "$(dirname "${BASH_SOURCE[0]}")/lib/prepare.sh"
 need_node
+need_postgres
 need_modules
 exec node scripts/command.mjs "$@"

@@ -2,14 +2,13 @@
 import { spawn } from 'node:child_process';
 import { build } from './lib/build.mjs';
 import { Cluster } from './lib/database.mjs';
+import { saySignIns, wholeDemo } from './lib/demo.mjs';
 import { at, ROOT } from './lib/paths.mjs';
 import { freePort } from './lib/ports.mjs';
 import {
   clearLastRun,
-  demo,
   forgetRun,
   noteRun,
-  saySignIns,
   serverProgram,
   serverSettings,
   startMailCatcher,
@@ -68,7 +67,7 @@ async function start() {
     startedDatabase,
     settings,
   });
-  const signIns = await step('Looking after the demo', () => demo(settings));
+  const signIns = await step('Looking after the demo', () => wholeDemo(settings, logins));
   goOn();
 
   const ends = [

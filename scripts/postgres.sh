@@ -13,6 +13,7 @@
 # PG_DIR            another folder for the cluster
 # PG_DB             another database name than wetside
 # PG_PORT           the first port to try
+# PG_HERE=1         the cluster lies in PG_DIR or nowhere
 set -euo pipefail
 umask 022
 ROOT="$(cd "$(dirname "${BASH_SOURCE[0]}")/.." && pwd -P)"
@@ -37,7 +38,7 @@ settle() {
   SERVER_USER="$(id -un)"
   if [ "$(id -u)" = 0 ]; then
     SERVER_USER=postgres
-    [ -f "$WANTED/data/PG_VERSION" ] || [ ! -f "$FALLBACK/data/PG_VERSION" ] || PLACE="$FALLBACK"
+    [ -n "${PG_HERE:-}" ] || [ -f "$WANTED/data/PG_VERSION" ] || [ ! -f "$FALLBACK/data/PG_VERSION" ] || PLACE="$FALLBACK"
     # Made by a person without root and now run with it: the server stays theirs.
     [ ! -d "$PLACE/data" ] || SERVER_USER="$(stat -c %U "$PLACE/data")"
   elif [ -d "$WANTED" ] && [ ! -w "$WANTED" ]; then
@@ -52,6 +53,7 @@ make_place() {
   if [ ! -d "$DATA" ]; then
     mkdir -p "$PLACE"
     if ! as_server test -x "$(dirname "$PLACE")"; then
+      [ -z "${PG_HERE:-}" ] || die "User $SERVER_USER, who runs the database, cannot reach $WANTED: choose a place that others may pass through, such as /srv, or let them (chmod o+x on the folders above)."
       rmdir "$PLACE" 2>/dev/null || true
       PLACE="$FALLBACK" DATA="$FALLBACK/data"
       mkdir -p "$PLACE"
@@ -99,15 +101,22 @@ left_over() {
   as_server sh -c 'for p in /proc/[0-9]*; do [ "$(readlink "$p/cwd" 2>/dev/null)" = "$1" ] && exit 0; done; exit 1' sh "$DATA"
 }
 
+if [ -n "${PG_HERE:-}" ]; then
+  BEGIN_ANEW='Nothing has been deleted. Keep the folder, and restore the last backup into a new one (docs/operate.md).'
+else
+  BEGIN_ANEW="Nothing has been deleted. Put the files back from a copy if you have one; to begin anew without what it held, run scripts/postgres.sh destroy and start again."
+fi
 make_cluster() {
   [ ! -f "$DATA/PG_VERSION" ] || return 0
+  [ ! -e "$DATA" ] || die "The database in $PLACE is damaged ($DATA holds no PG_VERSION). $BEGIN_ANEW"
   # Made beside and moved into place whole: a start that was cut short leaves no half of a cluster.
   local new="$PLACE/data.new" secret="$PLACE/super.pw"
   as_server rm -rf "$new"
   (umask 077 && password postgres >"$secret")
   [ "$(id -u)" != 0 ] || chown "$SERVER_USER" "$secret"
   as_server "$BIN/initdb" -D "$new" -U postgres -E UTF8 --locale=C.UTF-8 -A scram-sha-256 --pwfile="$secret" \
-    $([ "$PROFILE" = test ] && echo --no-sync || echo --data-checksums) >/dev/null 9>&-
+    $([ "$PROFILE" = test ] && echo --no-sync || echo --data-checksums) >/dev/null 9>&- ||
+    die "PostgreSQL could not make its files in $PLACE: see the lines above, mend that (room on the disk, rights) and start again."
   rm -f "$secret"
   {
     echo "listen_addresses = '127.0.0.1'"
@@ -146,7 +155,7 @@ run_server() {
     wish=$((wish + 1))
   done
   tail -n 15 "$PLACE/log" >&2 || true
-  die "PostgreSQL did not start: the lines above are the end of its log, $PLACE/log."
+  die "PostgreSQL did not start: the lines above are the end of its log, $PLACE/log. If its files are damaged: $BEGIN_ANEW"
 }
 
 start() {
@@ -231,7 +240,9 @@ case "${1:-}" in
     settle
     BIN="$(postgres_bin)"
     [ -z "$BIN" ] || stop
-    [ ! -e "$PLACE/passwords" ] || rm -rf "$PLACE"
+    # By name: PG_DIR may be a folder that holds other things too.
+    (cd "$PLACE" 2>/dev/null && rm -rf data data.new passwords passwords.new super.pw port log log.old lock) || true
+    rmdir "$PLACE" 2>/dev/null || true
     ;;
   *) die 'Say start, stop, status, destroy, database, grant-jobs, revoke-jobs, url, env or psql.' ;;
 esac

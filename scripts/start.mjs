@@ -2,13 +2,12 @@
 import { performance } from 'node:perf_hooks';
 import { build } from './lib/build.mjs';
 import { Cluster } from './lib/database.mjs';
+import { saySignIns, wholeDemo } from './lib/demo.mjs';
 import { freePort } from './lib/ports.mjs';
 import {
   clearLastRun,
-  demo,
   forgetRun,
   noteRun,
-  saySignIns,
   serverProgram,
   serverSettings,
   startMailCatcher,
@@ -56,13 +55,13 @@ async function start() {
     settings,
   };
   noteRun(run);
-  const signIns = await step('Looking after the demo', () => demo(settings));
+  const signIns = await step('Looking after the demo', () => wholeDemo(settings, logins));
   goOn();
   const server = await step('Starting the server', async () => {
     const service = new Service('server', [serverProgram], { ...process.env, ...settings });
     started.push({ name: 'server', stop: () => service.stop() });
     noteRun({ ...run, servers: [service.pid] });
-    await service.ready(`http://127.0.0.1:${port}/api/health`);
+    await service.ready(`http://127.0.0.1:${port}/api/ready`);
     return service;
   });
 

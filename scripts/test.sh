@@ -3,6 +3,6 @@
 set -euo pipefail
 . "$(dirname "${BASH_SOURCE[0]}")/lib/prepare.sh"
 need_node
-only_one testing 'The tests already run from this folder: wait for them to end.'
+only_one .local/testing 'The tests already run from this folder: wait for them to end.'
 need_modules
 exec node scripts/test.mjs "$@"

@@ -76,7 +76,12 @@ function hashOf(part) {
 
 /** @returns {Record<string, string>} */
 function stamps() {
-  return existsSync(stampFile()) ? JSON.parse(readFileSync(stampFile(), 'utf8')) : {};
+  try {
+    return JSON.parse(readFileSync(stampFile(), 'utf8'));
+  } catch {
+    // Not there, or cut short: everything is built again.
+    return {};
+  }
 }
 
 /** Builds what changed since the last build. Call it through `build`, which holds the lock. */

@@ -1,4 +1,5 @@
 import { connect } from 'node:net';
+import { migrate } from './migrate.mjs';
 import { at } from './paths.mjs';
 import { mustRun, read, run } from './run.mjs';
 import { Trouble, say } from './say.mjs';
@@ -10,14 +11,17 @@ const script = at('scripts', 'postgres.sh');
  * @property {string} DATABASE_URL the program's own login
  * @property {string} DATABASE_ADMIN_URL migrates and reconciles
  * @property {string} DATABASE_JOBS_URL the queue's
- * @property {string} DATABASE_SUPER_URL for tests alone
+ * @property {string} [DATABASE_SUPER_URL] for tests, and to make and swap databases in a restore; not of a given database
  */
 
 /** A private cluster: the one that keeps data, or the tests' own. */
 export class Cluster {
-  /** @param {'durable' | 'test'} profile */
-  constructor(profile) {
-    this.env = { ...process.env, PG_PROFILE: profile };
+  /**
+   * @param {'durable' | 'test'} profile
+   * @param {string} [dir] where it lies, and nowhere else; without it .local, or what PG_DIR says
+   */
+  constructor(profile, dir) {
+    this.env = { ...process.env, PG_PROFILE: profile, ...(dir ? { PG_DIR: dir, PG_HERE: '1' } : {}) };
     this.startedHere = false;
   }
 
@@ -54,14 +58,11 @@ export class Cluster {
     await mustRun('The rights for the migration could not be set.', script, ['grant-jobs', name], {
       env: this.env,
     });
-    const { code, output } = await read(process.execPath, [at('db', 'dist', 'cli', 'migrate.js')], {
-      env: { ...process.env, ...logins },
-    });
+    const trouble = await migrate(logins);
     await mustRun('The rights for the migration could not be taken back.', script, ['revoke-jobs', name], {
       env: this.env,
     });
-    if (code !== 0)
-      throw new Trouble(`${output}The database could not be brought to this version: see the lines above.`);
+    if (trouble) throw new Trouble(trouble);
   }
 }
 

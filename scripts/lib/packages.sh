@@ -5,13 +5,15 @@ die() { say "$*"; exit 1; }
 
 # need_packages PURPOSE PACKAGE...: installs what is missing, as root or through sudo.
 need_packages() {
-  local reason="$1" package missing=()
+  local reason="$1" package missing=() all
   shift
   for package in "$@"; do
     [ "$(dpkg-query -W -f='${db:Status-Status}' "$package" 2>/dev/null)" = installed ] || missing+=("$package")
   done
   [ ${#missing[@]} -gt 0 ] || return 0
-  local plea="Wetside needs the Debian packages ${missing[*]} for $reason: install them as root (apt-get install ${missing[*]}) and start again."
+  # Whoever has to ask somebody else for them should have to ask once.
+  all="${missing[*]} ${ALSO_NEEDED:-}" all="${all% }"
+  local plea="Wetside needs the Debian packages $all for $reason: install them as root (apt-get install $all) and start again."
   command -v apt-get >/dev/null || die "$plea"
   local sudo=()
   if [ "$(id -u)" != 0 ]; then
@@ -35,7 +37,7 @@ need_packages() {
 # The server without a cluster of Debian's own, which would take port 5432 and a place among the services.
 need_postgres() {
   [ -z "$(postgres_bin)" ] || return 0
-  need_packages 'its database' postgresql-common
+  ALSO_NEEDED=postgresql-15 need_packages 'its database' postgresql-common
   local rule=/etc/postgresql-common/createcluster.d/wetside.conf sudo=()
   [ "$(id -u)" = 0 ] || sudo=(sudo)
   "${sudo[@]}" mkdir -p "${rule%/*}"

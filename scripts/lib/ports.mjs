@@ -13,8 +13,11 @@ function canListen(port, host) {
   });
 }
 
+/** Both loopbacks must be free: a browser asks ::1 for localhost first. @param {number} port */
+export const isFree = async (port) => (await canListen(port, '127.0.0.1')) && (await canListen(port, '::1'));
+
 /**
- * The first free port from `first` on. Both loopbacks must be free: a browser asks ::1 for localhost first.
+ * The first free port from `first` on.
  * @param {string} what is said when the first choice is taken
  * @param {number} first
  * @param {number[]} [given] ports already promised to others
@@ -22,7 +25,7 @@ function canListen(port, host) {
 export async function freePort(what, first, given = []) {
   for (let port = first; port < first + 100 && port < 65_536; port += 1) {
     if (given.includes(port)) continue;
-    if ((await canListen(port, '127.0.0.1')) && (await canListen(port, '::1'))) {
+    if (await isFree(port)) {
       if (port !== first) say(`  port ${first} is taken: ${what} uses ${port}`);
       return port;
     }

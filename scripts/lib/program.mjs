@@ -5,7 +5,6 @@ import { clearInterval, setInterval } from 'node:timers';
 import { answers } from './database.mjs';
 import { at, local } from './paths.mjs';
 import { freePort } from './ports.mjs';
-import { read } from './run.mjs';
 import { say, Trouble } from './say.mjs';
 import { Service, stopLeftOver } from './service.mjs';
 
@@ -20,36 +19,36 @@ const DATABASE_CHECK_MS = 5_000;
  * @property {number[]} servers
  * @property {number[]} catchers
  * @property {boolean} startedDatabase
- * @property {NodeJS.ProcessEnv} settings the server's, for commands that run beside it
+ * @property {NodeJS.ProcessEnv} [settings] the server's, for commands that run beside it; not of real use, whose secrets stay off the disk
  */
 
-/** @returns {Running | null} the run that is on, or that was killed */
-export function lastRun() {
+/** @returns {Running | null} the run that is on, or that was killed @param {string} [file] of a run elsewhere than in .local */
+export function lastRun(file = runningFile()) {
   try {
-    return JSON.parse(readFileSync(runningFile(), 'utf8'));
+    return JSON.parse(readFileSync(file, 'utf8'));
   } catch {
     return null;
   }
 }
 
-/** @param {Running} running */
-export function noteRun(running) {
-  writeFileSync(runningFile(), JSON.stringify(running), { mode: 0o600 });
+/** @param {Running} running @param {string} [file] */
+export function noteRun(running, file = runningFile()) {
+  writeFileSync(file, JSON.stringify(running), { mode: 0o600 });
 }
 
-export function forgetRun() {
-  rmSync(runningFile(), { force: true });
+export function forgetRun(file = runningFile()) {
+  rmSync(file, { force: true });
 }
 
-/** After a kill -9 the parts of that run are still there: they are stopped first. @returns {Promise<boolean>} whether that run had started the database */
-export async function clearLastRun() {
-  const last = lastRun();
+/** After a kill -9 the parts of that run are still there: they are stopped first. @returns {Promise<boolean>} whether that run had started the database @param {string} [file] */
+export async function clearLastRun(file = runningFile()) {
+  const last = lastRun(file);
   if (!last) return false;
   let found = false;
   for (const pid of last.servers) found = (await stopLeftOver(pid, serverProgram)) || found;
   for (const pid of last.catchers) found = (await stopLeftOver(pid, catcherProgram)) || found;
   if (found) say('The last run was cut short: what it left behind is stopped, nothing stored is lost.');
-  forgetRun();
+  forgetRun(file);
   return last.startedDatabase;
 }
 
@@ -58,7 +57,10 @@ export function sessionSecret() {
   const file = local('secret');
   if (!existsSync(file)) writeFileSync(file, randomBytes(32).toString('base64url'), { mode: 0o600 });
   chmodSync(file, 0o600);
-  return readFileSync(file, 'utf8').trim();
+  const secret = readFileSync(file, 'utf8').trim();
+  if (secret.length < 32)
+    throw new Trouble(`${file} is damaged: delete it and start again; everybody then signs in anew.`);
+  return secret;
 }
 
 /** @param {string} name @param {number} otherwise */
@@ -105,29 +107,7 @@ export function serverSettings(logins, { port, origin, smtpPort }) {
   };
 }
 
-/**
- * Plays the demo if there is no darkroom yet.
- * @param {Record<string, string>} settings @param {string[]} [args]
- * @returns {Promise<Record<string, string>[]>} the demo's sign-ins
- */
-export async function demo(settings, args = []) {
-  const { code, output } = await read(process.execPath, [at('apps/api/dist/cli/demo.js'), ...args], {
-    env: { ...process.env, ...settings },
-  });
-  const lines = output.split('\n').filter((line) => line.trim() !== '');
-  for (const line of lines) if (!line.startsWith('{')) say(`  ${line}`);
-  if (code !== 0) throw new Trouble('The demo could not be played: see the lines above.');
-  return lines.filter((line) => line.startsWith('{')).map((line) => JSON.parse(line));
-}
-
-/** @param {Record<string, string>[]} signIns */
-export function saySignIns(signIns) {
-  for (const { email, passphrase, ...rest } of signIns) {
-    say(`    ${email}   ${passphrase}   ${Object.values(rest).join(', ')}`);
-  }
-}
-
-/** Brings a database back that somebody killed; the server finds it again by itself. @param {import('./database.mjs').Cluster} cluster @param {string} url */
+/** Brings a database back that somebody killed; the server finds it again by itself. @param {{ start: () => Promise<unknown> }} cluster @param {string} url */
 export function watchDatabase(cluster, url) {
   let busy = false;
   const timer = setInterval(async () => {

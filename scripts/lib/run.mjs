@@ -35,6 +35,24 @@ export function read(program, args, { env = process.env } = {}) {
 }
 
 /**
+ * Runs a program and gives all it printed, its errors too.
+ * @param {string} program @param {string[]} args @param {{ env?: NodeJS.ProcessEnv, input?: string }} [options]
+ * @returns {Promise<{ code: number, output: string, errors: string }>}
+ */
+export function readAll(program, args, { env = process.env, input = '' } = {}) {
+  return new Promise((resolve, reject) => {
+    const child = spawn(program, args, { cwd: ROOT, env, stdio: ['pipe', 'pipe', 'pipe'] });
+    let output = '';
+    let errors = '';
+    child.stdout.setEncoding('utf8').on('data', (text) => (output += text));
+    child.stderr.setEncoding('utf8').on('data', (text) => (errors += text));
+    child.stdin.on('error', () => undefined).end(input);
+    child.once('error', reject);
+    child.once('close', (code) => resolve({ code: code ?? 1, output, errors }));
+  });
+}
+
+/**
  * Runs a program that has to succeed.
  * @param {string} sentence what to say when it does not
  * @param {string} program

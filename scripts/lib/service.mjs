@@ -19,10 +19,11 @@ export class Service {
    * @param {string} name in sentences, and of the log
    * @param {string[]} args what Node runs
    * @param {NodeJS.ProcessEnv} env
+   * @param {string} [logFile] its log, elsewhere than in .local
    */
-  constructor(name, args, env) {
+  constructor(name, args, env, logFile = local('log', `${name.replaceAll(' ', '-')}.log`)) {
     this.name = name;
-    this.log = local('log', `${name.replaceAll(' ', '-')}.log`);
+    this.log = logFile;
     if (existsSync(this.log) && statSync(this.log).size > LOG_BYTES) renameSync(this.log, `${this.log}.old`);
     const log = openSync(this.log, 'a', 0o600);
     this.logStart = statSync(this.log).size;
