@@ -102,11 +102,10 @@ test.describe('one bottle of fixer, from the shelf to the drain', { tag: '@core'
 
   test('a healthy bottle takes a load in two taps', async () => {
     await member.reload();
+    // The count of the load before is remembered: two rolls again are two taps.
     await button(member, 'Put a load through').tap();
-    const confirm = button(sheet(member), /^Put \d+ rolls? through FX-01$/);
-    const count = Number(/\d+/.exec(await confirm.innerText())?.[0]);
-    await taken(member, 'loads', () => confirm.tap());
-    await expect(bath(member, 'FX-01')).toContainText(`${18 - count} rolls left`);
+    await taken(member, 'loads', () => button(sheet(member), 'Put 2 rolls through FX-01').tap());
+    await expect(bath(member, 'FX-01')).toContainText('16 rolls left');
   });
 
   test('low is mailed once each, however often it is ticked afterwards', async () => {

@@ -1,3 +1,4 @@
+import { rememberedChoice } from '../features/loads/remembered-choice.js';
 import { screen, waitFor, within } from '@testing-library/react';
 import { afterEach, describe, expect, it, vi } from 'vitest';
 import type { BottleList, BottleView, LoadContent } from '../shared/api/types.js';
@@ -275,9 +276,22 @@ describe('the load sheet', () => {
     await first.user.click(screen.getByRole('radio', { name: 'Tabular' }));
     await first.user.click(screen.getByRole('button', { name: /^Put 1 roll/ }));
     await waitFor(() => expect(screen.queryByRole('radio')).not.toBeInTheDocument());
-    expect(JSON.parse(localStorage.getItem('wetside.load.m-1') ?? '')).toEqual({
-      format: '120',
-      filmClass: 'tabular-grain',
-    });
+    expect(rememberedChoice('m-1')).toEqual({ format: '120', filmClass: 'tabular-grain', count: 1 });
+  });
+
+  it('never takes what was typed for another number', async () => {
+    sinkWith(bottleList([{ code: 'FX-01', document: fixer }]));
+    const { user } = renderAt('/d/harbour/sink');
+    await user.click(await screen.findByRole('button', { name: 'Put a load through' }));
+    const field = await screen.findByRole('textbox', { name: 'How many' });
+    for (const wrong of ['1.5', '-3', '0', '115', '10000', 'abc']) {
+      await user.clear(field);
+      await user.type(field, wrong);
+      expect(screen.getByText('Whole rolls, 1 to 99.')).toBeVisible();
+      expect(screen.queryByRole('button', { name: /^Put \d/ })).not.toBeInTheDocument();
+    }
+    await user.clear(field);
+    await user.type(field, '12');
+    expect(screen.getByRole('button', { name: 'Put 12 rolls through FX-01' })).toBeVisible();
   });
 });

@@ -35,6 +35,7 @@ describe('the routes', () => {
     );
     expect(open.map(({ method, path }) => `${method} ${path}`).sort()).toEqual([
       'GET /health',
+      'GET /ready',
       'POST /sign-in',
       'POST /sign-in/refresh',
       'POST /sign-out',

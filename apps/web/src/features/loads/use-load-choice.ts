@@ -7,7 +7,7 @@ import type { OpenLoad } from './use-load-sheet.js';
 
 /** What the person has chosen on the sheet so far. */
 export function useLoadChoice(membershipId: string, load: OpenLoad) {
-  const [film, setFilm] = useState<FilmLine>(() => ({ ...rememberedChoice(membershipId), count: 1 }));
+  const [film, setFilm] = useState<FilmLine>(() => rememberedChoice(membershipId));
   const [picks, setPicks] = useState(() => noPicks(load.reported ? load.bottleIds : []));
   return {
     film,

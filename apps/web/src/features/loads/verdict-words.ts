@@ -25,5 +25,20 @@ export function verdictWords(baths: readonly Standing[]): string | null {
   if (!least) return null;
   const next = nextAfter(least.standing, open, oneRoll);
   const words = `${countOf(roundLeftDown(least.leftE4), 'roll')} more. ${least.standing.bottle.code} gives out first.`;
-  return next ? `${words} Then ${next.bottle.code}.` : words;
+  const renew = renewFirst(baths);
+  return [words, ...(next ? [`Then ${next.bottle.code}.`] : []), ...renew].join(' ');
 }
+
+/** A bath that is cheap to renew never closes the line; that it is finished is said, and why. */
+function renewFirst(baths: readonly Standing[]): string[] {
+  const open = new Set(baths.filter(isOpen).map(({ bottle }) => bottle.role));
+  const seen = new Set<string>();
+  return baths.flatMap(({ bottle, document, assessment }) => {
+    if (!document.cheapToRenew || open.has(bottle.role) || seen.has(bottle.role)) return [];
+    seen.add(bottle.role);
+    return [`Mix fresh ${roleWords(bottle.role)} first: ${bottle.code} is ${stateWord(assessment.verdict)}.`];
+  });
+}
+
+/** 'stop bath', 'wetting agent'. */
+const roleWords = (role: string): string => role.replaceAll('-', ' ');

@@ -51,7 +51,7 @@ function newPack(pack: ShelfPack, lot: Lot, from: ChemistryFrom, today: LocalDat
     return pack.parts.length === 1 && restUl > 0 ? ` and ${showVolume(restUl)} in the opened pack` : '';
   };
   const expiry = lot.expiresOn
-    ? `, to ${showDate(lot.expiresOn, today)}${lot.expiryIsGuess ? ' (a guess)' : ''}`
+    ? `, ${lot.expiresOn < today ? 'expired' : 'to'} ${showDate(lot.expiresOn, today)}${lot.expiryIsGuess ? ' (a guess)' : ''}`
     : '';
   return {
     value: `lot:${lot.id}`,

@@ -44,7 +44,10 @@ export function filmPhrase(film: FilmLine): string {
 }
 
 /** A sheet of another size counts only once both its sides are known. */
-export const isMeasured = (film: FilmLine): boolean =>
+export const isMeasured = (film: FilmLine): boolean => isSized(film) && film.count >= 1;
+
+/** Whether its area is known: a sheet of another size has both its sides. */
+export const isSized = (film: FilmLine): boolean =>
   film.format !== 'sheet' || Boolean(film.widthMm && film.heightMm);
 
 /** '6 sheets = 1.5 rolls', or nothing where the pieces are rolls of the plain size. */

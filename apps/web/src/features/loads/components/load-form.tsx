@@ -1,7 +1,7 @@
 import { Box, Button, Stack } from '@chakra-ui/react';
 import { type FormEvent, type KeyboardEvent, type RefObject, useRef } from 'react';
 import { useDarkroom } from '../../../shared/darkroom/darkroom-context.js';
-import { equivalence, filmPhrase, isMeasured } from '../../../shared/formats/film-words.js';
+import { equivalence, filmPhrase, isSized } from '../../../shared/formats/film-words.js';
 import { paths } from '../../../shared/routes/paths.js';
 import { TextLink } from '../../../shared/ui/links.js';
 import type { Standing } from '../../bottles/standing.js';
@@ -40,7 +40,7 @@ export function LoadForm({ load, baths, onDone, confirmRef }: Props) {
     // Confirmed once: a second press of a double tap finds nothing to do.
     if (confirmed.current || plan.button === null) return;
     confirmed.current = true;
-    rememberChoice(me.membershipId, { format: film.format, filmClass: film.filmClass });
+    rememberChoice(me.membershipId, film);
     const content = {
       bottleIds: plan.through.map(({ bottle }) => bottle.id),
       material: 'film' as const,
@@ -55,7 +55,7 @@ export function LoadForm({ load, baths, onDone, confirmRef }: Props) {
   const typeDigit = (event: KeyboardEvent): void => {
     if (/^[1-9]$/.test(event.key) && !isTyping(event.target)) choice.setCount(Number(event.key));
   };
-  const equal = isMeasured(film) ? equivalence(film) : 'Say its width and height.';
+  const equal = isSized(film) ? equivalence(film) : 'Say its width and height.';
 
   return (
     <form onSubmit={confirm} onKeyDown={typeDigit}>

@@ -124,7 +124,7 @@ export function MixFields({
           {...register('mixedAt', {
             validate: (wall) => {
               if (wall === '') return 'Say when it was mixed.';
-              return wall.slice(0, 10) <= now || 'Mixed cannot be after today.';
+              return wall.slice(0, 10) <= now || 'It cannot have been mixed after today.';
             },
           })}
         />

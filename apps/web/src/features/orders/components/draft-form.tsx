@@ -1,5 +1,6 @@
 import { Box, Button, Flex, Grid, Stack } from '@chakra-ui/react';
-import { useForm } from 'react-hook-form';
+import { useEffect } from 'react';
+import { useForm, useWatch } from 'react-hook-form';
 import type { OrderView } from '../../../shared/api/types.js';
 import { showMoney } from '../../../shared/formats/amounts.js';
 import { FormError } from '../../../shared/ui/form-error.js';
@@ -18,11 +19,32 @@ const valuesOf = (order: OrderView): DraftValues => ({
   note: order.note ?? '',
 });
 
+interface Props {
+  order: OrderView;
+  /** Told whether something is typed that is not saved. */
+  onDirty: (dirty: boolean) => void;
+}
+
+/** What the counts as they are typed come to; null where one is no count or a price is not known. */
+function totalOf(order: OrderView, counts: DraftValues['counts']): number | null {
+  return order.lines.reduce<number | null>((sum, line, index) => {
+    const text = counts[index]?.count.trim() ?? '';
+    if (sum === null || line.priceMinor === null || !whole.test(text)) return null;
+    return sum + line.priceMinor * Number(text);
+  }, 0);
+}
+
 /** The counts and the note of a draft. A count of 0 takes the line out. */
-export function DraftForm({ order }: { order: OrderView }) {
+export function DraftForm({ order, onDirty }: Props) {
   const patch = usePatchOrder(order.id);
   const form = useForm<DraftValues>({ defaultValues: valuesOf(order) });
   const { register, handleSubmit, setError, formState } = form;
+  const { isDirty } = formState;
+  const counts = useWatch({ control: form.control, name: 'counts' });
+  useEffect(() => {
+    onDirty(isDirty);
+    return () => onDirty(false);
+  }, [isDirty, onDirty]);
   const save = handleSubmit(async ({ counts, note }) => {
     const lines = order.lines.map(({ id, supplierPackId, count }, index) => ({
       id,
@@ -63,7 +85,7 @@ export function DraftForm({ order }: { order: OrderView }) {
         <TextField label="Note to the supplier" {...register('note')} />
         <FormError message={formState.errors.root?.message} />
         <Flex gap="3" wrap="wrap" justify="space-between" align="center">
-          <Box fontWeight="700">Total {showMoney(order.totalMinor, order.currency)}</Box>
+          <Box fontWeight="700">Total {showMoney(totalOf(order, counts), order.currency)}</Box>
           <Button
             type="submit"
             variant="outline"

@@ -1,10 +1,11 @@
-import { Box, Button, chakra } from '@chakra-ui/react';
+import { Box, Button, chakra, Flex, Stack } from '@chakra-ui/react';
 import { useState } from 'react';
 import { newId } from '../../../shared/actions/send-action.js';
 import { showStrip } from '../../../shared/actions/strip.store.js';
 import { wordsOf } from '../../../shared/api/problem.js';
 import type { OrderView } from '../../../shared/api/types.js';
 import { useMay } from '../../../shared/darkroom/darkroom-context.js';
+import { showMoney } from '../../../shared/formats/amounts.js';
 import { FormError } from '../../../shared/ui/form-error.js';
 import { SectionHeading } from '../../../shared/ui/page-heading.js';
 import { usePutOrderSending } from '../api/put-order-sending.js';
@@ -12,14 +13,26 @@ import { usePutOrderSending } from '../api/put-order-sending.js';
 interface Props {
   order: OrderView;
   mailText: string | null;
+  /** The draft has changes that are not saved: what would go out is not what is seen. */
+  unsaved: boolean;
 }
 
+const packsOf = (order: OrderView): string => {
+  const packs = order.lines.reduce((sum, line) => sum + line.count, 0);
+  return `${packs} ${packs === 1 ? 'pack' : 'packs'}`;
+};
+
+/** Not undoable, so it is asked once, and what goes is named. */
+const goesWords = (order: OrderView): string =>
+  `Order ${order.numberText}, ${packsOf(order)}, ${showMoney(order.totalMinor, order.currency)}, goes to ${order.supplier.email}. It cannot be taken back.`;
+
 /** The mail as it would go out, and the button that sends it. */
-export function SendOrder({ order, mailText }: Props) {
+export function SendOrder({ order, mailText, unsaved }: Props) {
   const maySend = useMay('manager');
   const sending = usePutOrderSending();
   const [actionId, setActionId] = useState(newId);
   const [problem, setProblem] = useState<string>();
+  const [asking, setAsking] = useState(false);
   const send = async (): Promise<void> => {
     setProblem(undefined);
     try {
@@ -50,18 +63,34 @@ export function SendOrder({ order, mailText }: Props) {
         </chakra.pre>
       )}
       <FormError message={problem} />
-      {maySend ? (
-        <Button
-          minH="13"
-          whiteSpace="normal"
-          loading={sending.isPending}
-          loadingText="Sending"
-          onClick={() => void send()}
-        >
+      {!maySend && <Box>A manager sends it.</Box>}
+      {maySend && unsaved && (
+        <Box fontWeight="600">Save the draft first: this mail does not have your changes.</Box>
+      )}
+      {maySend && !asking && (
+        <Button minH="13" whiteSpace="normal" disabled={unsaved} onClick={() => setAsking(true)}>
           Send the order
         </Button>
-      ) : (
-        <Box>A manager sends it.</Box>
+      )}
+      {maySend && asking && (
+        <Stack gap="3">
+          <Box fontWeight="600">{goesWords(order)}</Box>
+          <Flex gap="3" wrap="wrap">
+            <Button
+              minH="13"
+              whiteSpace="normal"
+              disabled={unsaved}
+              loading={sending.isPending}
+              loadingText="Sending"
+              onClick={() => void send()}
+            >
+              Send {packsOf(order)}
+            </Button>
+            <Button variant="outline" minH="13" onClick={() => setAsking(false)}>
+              Not yet
+            </Button>
+          </Flex>
+        </Stack>
       )}
     </section>
   );

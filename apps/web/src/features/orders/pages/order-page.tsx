@@ -53,6 +53,7 @@ function Order({ data }: { data: OrderPageData }) {
   const { zone } = useDarkroom();
   const mayCancel = useMay('manager');
   const [cancelling, setCancelling] = useState(false);
+  const [unsaved, setUnsaved] = useState(false);
   const { order, mailText } = data;
   const isOpen = order.state === 'draft' || order.state === 'sent';
   const progress = order.lines.reduce((sum, line) => sum + line.received, 0);
@@ -78,14 +79,14 @@ function Order({ data }: { data: OrderPageData }) {
       >
         <Box>
           {order.state === 'draft' ? (
-            <DraftForm key={order.revision} order={order} />
+            <DraftForm key={order.revision} order={order} onDirty={setUnsaved} />
           ) : (
             <OrderLines order={order} />
           )}
           {order.state !== 'draft' && order.note && <Box mt="3">Note: {order.note}</Box>}
         </Box>
         <Box>
-          {order.state === 'draft' && <SendOrder order={order} mailText={mailText} />}
+          {order.state === 'draft' && <SendOrder order={order} mailText={mailText} unsaved={unsaved} />}
           {order.state === 'sent' && <OrderReceive key={progress} order={order} />}
           {isOpen && <OutUntilRows order={order} />}
         </Box>

@@ -8,6 +8,8 @@ interface Props {
   useFirst: boolean;
 }
 
+const isExpired = ({ expiresOn }: Lot, today: LocalDate): boolean => expiresOn !== null && expiresOn < today;
+
 const expiryWords = ({ expiresOn, expiryIsGuess }: Lot, today: LocalDate): string => {
   if (!expiresOn) return 'no expiry date known';
   const past = expiresOn < today ? 'expired' : 'expires';
@@ -19,7 +21,7 @@ export function ShelfLot({ lot, today, useFirst }: Props) {
   return (
     <Box as="li" py="1">
       lot {lot.lotNumber}: {lot.unopened} unopened, {expiryWords(lot, today)}
-      {useFirst && <Box as="strong"> use first</Box>}
+      {useFirst && !isExpired(lot, today) && <Box as="strong"> use first</Box>}
       {lot.opened.map((opened) => (
         <Box key={opened.id} ps="4">
           opened {showDate(opened.openedOn, today)}, {opened.partName}:{' '}

@@ -1,0 +1,2 @@
+/** The most pieces of one load. */
+export const MOST = 99;
