@@ -133,6 +133,8 @@ test.describe('one bottle of fixer, from the shelf to the drain', { tag: '@core'
   test('through a spent bottle a load is only reported, and shows in the bottle’s own row', async () => {
     const open = await openLoad(member);
     await expect(open.getByRole('button', { name: /^Put/ })).toHaveCount(0);
+    // The sheet remembers the five of the load before.
+    await open.getByLabel('How many').fill('1');
     await button(open, 'It has been through FX-01 already').click();
     await taken(member, 'loads', () => button(open, 'Report 1 roll through FX-01').click());
     await expect(strip(member)).toContainText('1 roll of 135 is reported.');

@@ -65,6 +65,8 @@ export class World {
 
   /** Signs in by the form and waits for the sink. */
   async signIn(page: Page, role: RoleName): Promise<void> {
+    // A sign-in that still holds would be renewed and lead away from the form while it is filled in.
+    await page.context().clearCookies();
     await page.goto(`${this.origin}/sign-in`);
     await page.getByLabel('E-mail address').fill(this.place.cast[role].email);
     await page.getByLabel('Passphrase').fill(passphrase);

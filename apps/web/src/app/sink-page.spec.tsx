@@ -15,6 +15,7 @@ import {
   wettingAgent,
 } from '../testing/fixtures.js';
 import { renderAt } from '../testing/render-at.js';
+import { says } from '../testing/says.js';
 
 const three: BottleSketch[] = [
   { code: 'WT-03', document: wettingAgent },
@@ -61,7 +62,7 @@ describe('the sink', () => {
       .getAllByText(/^[A-Z]{2}-\d\d$/)
       .map((one) => one.textContent);
     expect(codes).toEqual(['SB-02', 'FX-01', 'WT-03']);
-    expect(screen.getByText('13 rolls more. FX-01 gives out first.')).toBeVisible();
+    expect(screen.getByText(says('13 rolls more. FX-01 gives out first.'))).toBeVisible();
   });
 
   it('says so when it cannot be fetched, and tries again', async () => {
@@ -123,7 +124,7 @@ describe('the sink', () => {
     expect(await fixerWith(12)).toBeInTheDocument();
     answer.release({ status: 422, body: { code: 'too-early', detail: 'FX-01 was not mixed then.' } });
     expect(await fixerWith(13)).toBeInTheDocument();
-    expect(screen.getByText('FX-01 was not mixed then.')).toBeInTheDocument();
+    expect(screen.getByText(says('FX-01 was not mixed then.'))).toBeInTheDocument();
     expect(screen.queryByRole('button', { name: 'Undo' })).not.toBeInTheDocument();
   });
 
@@ -198,7 +199,7 @@ describe('the load sheet', () => {
     await fixerWith(6);
     await user.click(row('FX-01'));
     await user.type(await screen.findByRole('textbox', { name: 'How many' }), '8');
-    expect(await screen.findByText('FX-01 has 6 rolls left, this is 8: 2 over')).toBeVisible();
+    expect(await screen.findByText(says('FX-01 has 6 rolls left, this is 8: 2 over'))).toBeVisible();
     expect(screen.getByRole('button', { name: 'Put 8 through, 2 over' })).toBeVisible();
   });
 
@@ -207,9 +208,9 @@ describe('the load sheet', () => {
     const { user } = renderAt('/d/harbour/sink');
     await user.click(await screen.findByRole('button', { name: 'Put a load through' }));
     await user.click(await screen.findByRole('button', { name: 'One more' }));
-    expect(screen.getByText('Leaves 10 rolls in SB-02.')).toBeVisible();
+    expect(screen.getByText(says('Leaves 10 rolls in SB-02.'))).toBeVisible();
     await user.click(screen.getByRole('button', { name: /^SB-02 / }));
-    expect(screen.getByText('Leaves 11 rolls in FX-01.')).toBeVisible();
+    expect(screen.getByText(says('Leaves 11 rolls in FX-01.'))).toBeVisible();
     expect(screen.getByRole('button', { name: 'Put 2 rolls through 2 bottles' })).toBeVisible();
   });
 
@@ -223,7 +224,7 @@ describe('the load sheet', () => {
     );
     const { user } = renderAt('/d/harbour/sink');
     await user.click(await screen.findByRole('button', { name: 'Put a load through' }));
-    expect(await screen.findByText('FX-01: On hold by Tomas: cloudy.')).toBeVisible();
+    expect(await screen.findByText(says('FX-01: On hold by Tomas: cloudy.'))).toBeVisible();
     expect(screen.queryByRole('button', { name: /^(Put|Report) \d/ })).not.toBeInTheDocument();
     await user.click(screen.getByRole('button', { name: 'It has been through FX-01 already' }));
     await user.click(screen.getByRole('button', { name: 'Report 1 roll through 2 bottles' }));
@@ -244,7 +245,7 @@ describe('the load sheet', () => {
     const { user } = renderAt('/d/harbour/sink');
     await user.click(await screen.findByRole('button', { name: 'Put a load through' }));
     expect(await screen.findByRole('button', { name: 'Put 1 roll through FX-01' })).toBeVisible();
-    expect(screen.getByText(/^SB-02: Spent: 12 of 12 rolls used/)).toBeVisible();
+    expect(screen.getByText(says(/^SB-02 is left out. Spent: 12 of 12 rolls used/))).toBeVisible();
   });
 
   it('takes a sheet of any size once both its sides are said', async () => {

@@ -12,6 +12,7 @@ import {
   stopBath,
 } from '../testing/fixtures.js';
 import { renderAt } from '../testing/render-at.js';
+import { says } from '../testing/says.js';
 
 /** FX-02 was mixed before FX-03 and has 6 of its 20 rolls left; the stop bath has 12. */
 const older: BottleSketch = { code: 'FX-02', document: fixer, rolls: 14, daysOld: 9 };
@@ -44,7 +45,7 @@ describe('two open bottles of one role', () => {
     await openSheet(sink);
     expect(chip('FX-02')).toHaveAttribute('aria-pressed', 'true');
     expect(chip('FX-01')).toHaveAttribute('aria-pressed', 'false');
-    expect(screen.getByText('Leaves 5 rolls in FX-02.')).toBeVisible();
+    expect(screen.getByText(says('Leaves 5 rolls in FX-02.'))).toBeVisible();
     await sink.user.click(screen.getByRole('button', { name: 'Put 1 roll through 2 bottles' }));
     expect(await sink.sentBottles()).toEqual(['b-SB-01', 'b-FX-02']);
   });
@@ -67,7 +68,7 @@ describe('two open bottles of one role', () => {
     expect(chip('FX-02')).toHaveAttribute('aria-pressed', 'true');
     await sink.user.click(screen.getByRole('button', { name: 'One more' }));
     expect(chip('FX-03')).toHaveAttribute('aria-pressed', 'true');
-    expect(screen.getByText('FX-02 has 6 rolls left: this load goes through FX-03.')).toBeVisible();
+    expect(screen.getByText(says('FX-02 has 6 rolls left: this load goes through FX-03.'))).toBeVisible();
     expect(screen.getByRole('button', { name: 'Put 7 rolls through FX-03' })).toBeVisible();
     await sink.user.click(chip('FX-02'));
     expect(screen.getByRole('button', { name: 'Put 7 through, 1 over' })).toBeVisible();
@@ -85,17 +86,17 @@ describe('two open bottles of one role', () => {
 
   it('counts the one that would be used, and says which stands ready', async () => {
     sinkOf([older, newer, stop]);
-    expect(await screen.findByText('6 rolls more. FX-02 gives out first. Then FX-03.')).toBeVisible();
+    expect(await screen.findByText(says('6 rolls more. FX-02 gives out first. Then FX-03.'))).toBeVisible();
   });
 
   it('names no next bottle that has nothing left', async () => {
     sinkOf([older, { ...newer, rolls: 20 }, stop]);
-    expect(await screen.findByText('6 rolls more. FX-02 gives out first.')).toBeVisible();
+    expect(await screen.findByText(says('6 rolls more. FX-02 gives out first.'))).toBeVisible();
   });
 
   it('uses the other while the first is on hold, and reports a load through that one instead', async () => {
     const sink = sinkOf([{ ...older, hold: 'cloudy' }, newer]);
-    expect(await screen.findByText('20 rolls more. FX-03 gives out first.')).toBeVisible();
+    expect(await screen.findByText(says('20 rolls more. FX-03 gives out first.'))).toBeVisible();
     await openSheet(sink);
     expect(screen.getByRole('button', { name: 'Put 1 roll through FX-03' })).toBeVisible();
     await sink.user.click(screen.getByRole('button', { name: 'It has been through FX-02 already' }));

@@ -25,6 +25,8 @@ export interface LoadPlan {
   through: Standing[];
   /** Closed and not in the load. */
   closed: Standing[];
+  /** Closed and in the load all the same: the film has been through them already. */
+  reported: Standing[];
   /** Closed, and without it the film is lost: nothing is put through until it is left out knowingly. */
   blocking: Standing[];
   over: Over[];
@@ -90,16 +92,21 @@ export function planLoad({ baths, picks, film }: Choice): LoadPlan {
     (bath) => isEssential(bath.bottle.role) && !out(bath) && !covered(bath, through),
   );
   const isReport = through.some((bath) => reported.has(bath.bottle.id));
+  const shut = through.filter((bath) => !isOpen(bath));
   const over = through.filter(isOpen).flatMap((bath) => overOf(bath, film));
   const leaves = leavesWords(through.filter(isOpen), film);
   const instead = insteadWords(through.filter(isOpen), baths, film);
   const ready = through.length > 0 && blocking.length === 0 && isMeasured(film);
   const button = ready ? buttonWords({ through, over, isReport }, film) : null;
-  return { through, closed, blocking, over, instead, leaves, button, isReport };
+  return { through, closed, reported: shut, blocking, over, instead, leaves, button, isReport };
 }
 
-/** 'FX-01 cannot be used: Past its date since 28 Feb.' */
+/** 'FX-01: Past its date since 28 Feb.' */
 export const closedWords = ({ bottle, sentence }: Standing): string => `${bottle.code}: ${sentence}.`;
+
+/** 'SB-02 is left out. Spent: 12 of 12 rolls used.' */
+export const leftOutWords = ({ bottle, sentence }: Standing): string =>
+  `${bottle.code} is left out. ${sentence}.`;
 
 /** 'FX-01 and SB-02': the codes of some bottles. */
 export const codesOf = (standings: readonly Standing[]): string =>

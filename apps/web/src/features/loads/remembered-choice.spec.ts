@@ -18,6 +18,12 @@ it('keeps format and class, and the count for 12 hours', () => {
   expect(rememberedChoice('m-1')).toEqual({ ...two, count: 1 });
 });
 
+it('keeps the sides of a sheet of another size', () => {
+  const sheets = { format: 'sheet', filmClass: 'ortho', count: 6, widthMm: 100, heightMm: 150 } as const;
+  rememberChoice('m-1', sheets);
+  expect(rememberedChoice('m-1')).toEqual(sheets);
+});
+
 it('carries nothing over to another person', () => {
   rememberChoice('m-1', two);
   expect(rememberedChoice('m-2')).toEqual({ format: '135-36', filmClass: 'conventional', count: 1 });

@@ -1,4 +1,4 @@
-import { roundLeftDown } from '@wetside/chemistry';
+import { roundLeftDown, showVolume } from '@wetside/chemistry';
 import type { FilmLine } from '../../shared/api/types.js';
 import { countOf } from '../../shared/formats/amounts.js';
 import { stateWord } from '../../shared/ui/state-mark.js';
@@ -22,21 +22,22 @@ export function verdictWords(baths: readonly Standing[]): string | null {
     return typeof leftE4 === 'number' ? [{ standing, leftE4 }] : [];
   });
   const [least] = known.sort((a, b) => a.leftE4 - b.leftE4);
-  if (!least) return null;
+  const renew = renewFirst(baths);
+  if (!least) return renew.length > 0 ? renew.join(' ') : null;
   const next = nextAfter(least.standing, open, oneRoll);
   const words = `${countOf(roundLeftDown(least.leftE4), 'roll')} more. ${least.standing.bottle.code} gives out first.`;
-  const renew = renewFirst(baths);
   return [words, ...(next ? [`Then ${next.bottle.code}.`] : []), ...renew].join(' ');
 }
 
 /** A bath that is cheap to renew never closes the line; that it is finished is said, and why. */
 function renewFirst(baths: readonly Standing[]): string[] {
   const open = new Set(baths.filter(isOpen).map(({ bottle }) => bottle.role));
-  const seen = new Set<string>();
-  return baths.flatMap(({ bottle, document, assessment }) => {
-    if (!document.cheapToRenew || open.has(bottle.role) || seen.has(bottle.role)) return [];
-    seen.add(bottle.role);
-    return [`Mix fresh ${roleWords(bottle.role)} first: ${bottle.code} is ${stateWord(assessment.verdict)}.`];
+  const shut = baths.filter(({ bottle, document }) => document.cheapToRenew && !open.has(bottle.role));
+  // Of several of one role the newest is named: its place is the one to fill.
+  const newest = new Map(shut.map((standing) => [standing.bottle.role, standing]));
+  return [...newest.values()].map(({ bottle, assessment }) => {
+    const much = showVolume(bottle.totals.container.sizeUl);
+    return `Mix ${much} of ${roleWords(bottle.role)} first: ${bottle.code} is ${stateWord(assessment.verdict)}.`;
   });
 }
 

@@ -7,12 +7,15 @@ import type {
   OpenedPack,
   ShelfPack,
 } from '../../shared/api/types.js';
+import { byExpiry, expiryWords, isExpired } from '../shelf/lot-expiry.js';
 
 /** Where a mix can come from, with what it can make at most. */
 export interface MixSource {
   value: string;
   label: string;
   note: string;
+  /** Its lot has expired. */
+  isPast?: boolean;
   from: MixFrom;
   /** The most it makes; null where nobody counts. */
   maxUl: number | null;
@@ -50,13 +53,15 @@ function newPack(pack: ShelfPack, lot: Lot, from: ChemistryFrom, today: LocalDat
     const restUl = part?.sizeUl ? Math.floor(part.sizeUl * (1 - volumeUl / from.volumeUl)) : 0;
     return pack.parts.length === 1 && restUl > 0 ? ` and ${showVolume(restUl)} in the opened pack` : '';
   };
+  const isPast = isExpired(lot, today);
   const expiry = lot.expiresOn
-    ? `, ${lot.expiresOn < today ? 'expired' : 'to'} ${showDate(lot.expiresOn, today)}${lot.expiryIsGuess ? ' (a guess)' : ''}`
+    ? `, to ${showDate(lot.expiresOn, today)}${lot.expiryIsGuess ? ' (a guess)' : ''}`
     : '';
   return {
     value: `lot:${lot.id}`,
     label: `New pack of ${pack.name}, lot ${lot.lotNumber}`,
-    note: `${lot.unopened} on the shelf${expiry}`,
+    note: `${lot.unopened} on the shelf${isPast ? `, ${expiryWords(lot, today)}` : expiry}`,
+    isPast,
     from: { kind: 'lot', lotId: lot.id },
     maxUl: from.volumeUl,
     wholeUl: from.wholeOnly ? from.volumeUl : null,
@@ -75,6 +80,8 @@ function openedPack(
   if (!first || parts.length < pack.parts.length) return [];
   const maxUl = Math.floor(from.volumeUl * Math.min(...parts.map((part) => shareLeft(pack, part))));
   if (maxUl <= 0) return [];
+  const isPast = isExpired(lot, today);
+  const ends = isPast ? `, ${expiryWords(lot, today)}` : ': use first';
   const amount = parts.flatMap(({ leftUl }) => (leftUl === null ? [] : [showVolume(leftUl)])).join(' + ');
   const leaves = (volumeUl: number): string | null => {
     const leftUl = first.leftUl === null ? 0 : Math.floor(first.leftUl * (1 - volumeUl / maxUl));
@@ -84,7 +91,8 @@ function openedPack(
     {
       value: `opened:${parts.map(({ id }) => id).join(',')}`,
       label: `Opened pack of ${pack.name}, lot ${lot.lotNumber}`,
-      note: `${amount ? `${amount} left, ` : ''}opened ${showDate(first.openedOn, today)}: use first`,
+      note: `${amount ? `${amount} left, ` : ''}opened ${showDate(first.openedOn, today)}${ends}`,
+      isPast,
       from: { kind: 'opened', openedPackIds: parts.map(({ id }) => id) },
       maxUl,
       wholeUl: null,
@@ -106,9 +114,7 @@ function openedPacks(pack: ShelfPack, lot: Lot, from: ChemistryFrom, today: Loca
   ).flatMap((parts) => openedPack(pack, lot, parts, from, today));
 }
 
-const byExpiry = (a: Lot, b: Lot): number => (a.expiresOn ?? '9999').localeCompare(b.expiresOn ?? '9999');
-
-/** Opened packs first, then lots by their date, then by hand. */
+/** Opened packs first, then lots by their date, then what has expired, then by hand. */
 export function mixSources(
   chemistry: ChemistryView,
   packs: readonly ShelfPack[],
@@ -118,9 +124,9 @@ export function mixSources(
     const pack = packs.find(({ id }) => id === from.packId);
     return pack ? [...pack.lots].sort(byExpiry).map((lot) => ({ pack, lot, from })) : [];
   });
-  return [
+  const sources = [
     ...stock.flatMap(({ pack, lot, from }) => openedPacks(pack, lot, from, today)),
     ...stock.flatMap(({ pack, lot, from }) => (lot.unopened > 0 ? [newPack(pack, lot, from, today)] : [])),
-    byHand,
   ];
+  return [...sources.filter(({ isPast }) => !isPast), ...sources.filter(({ isPast }) => isPast), byHand];
 }

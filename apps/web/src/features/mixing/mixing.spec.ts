@@ -3,6 +3,7 @@ import { describe, expect, it } from 'vitest';
 import type { ChemistryView, Lot, ShelfPack } from '../../shared/api/types.js';
 import { measureLines, showMeasured } from './measure-words.js';
 import { checkSize, checkVolume, fieldOfMix, mixContent, type MixForm } from './mix-form.js';
+import { lateWords } from './late-words.js';
 import { mixSources } from './mix-sources.js';
 
 const today = '2026-12-01';
@@ -67,6 +68,19 @@ describe('where a mix comes from', () => {
     expect(sources[0]?.note).toBe('600 mL left, opened 6 Oct: use first');
   });
 
+  it('offers what has expired last, says since when, and never to use it first', () => {
+    const old = lot('l-old', 2, '2020-05-01', [opened('o-1', 'concentrate', 600_000, '2019-10-06')]);
+    const sources = mixSources(chemistry(), [pack([old, lot('l-new', 1, '2028-01-25')])], today);
+    expect(sources.map(({ value, isPast }) => [value, isPast ?? false])).toEqual([
+      ['lot:l-new', false],
+      ['opened:o-1', true],
+      ['lot:l-old', true],
+      ['hand', false],
+    ]);
+    expect(sources[1]?.note).toBe('600 mL left, opened 6 Oct 2019, expired 1 May 2020');
+    expect(sources[2]?.note).toBe('2 on the shelf, expired 1 May 2020');
+  });
+
   it('says what it leaves, and whether that meets the reorder point', () => {
     const [source] = mixSources(chemistry(), [pack([lot('l-1', 2, null)])], today);
     expect(source?.leaves(1_000_000)).toBe(
@@ -120,6 +134,14 @@ describe('the form of a mix', () => {
     expect(fieldOfMix('', 'lot-empty')).toBe('from');
     expect(fieldOfMix('', 'volume-over-container')).toBe('sizeMl');
     expect(fieldOfMix('', 'broken')).toBeNull();
+  });
+});
+
+describe('what is recorded late', () => {
+  it('says what would be past its date already, and what is long ago', () => {
+    expect(lateWords('2026-11-30', '2026-11-20', today)).toBe('It would be past its date already.');
+    expect(lateWords('2026-12-01', '2026-11-01', today)).toBeNull();
+    expect(lateWords(null, '2026-10-31', today)).toBe('That is 31 days ago. Is the day right?');
   });
 });
 

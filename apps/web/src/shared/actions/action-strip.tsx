@@ -2,6 +2,7 @@ import { Box, Button, Flex } from '@chakra-ui/react';
 import { onlineManager } from '@tanstack/react-query';
 import { useSyncExternalStore } from 'react';
 import { useStore } from '../store.js';
+import { CodeWords } from '../ui/code-words.js';
 import { clearStrip, type Strip, strip as stripStore } from './strip.store.js';
 import { useUndo } from './use-undo.js';
 
@@ -36,7 +37,7 @@ export function ActionStrip() {
           borderColor="rule"
         >
           <Box flex="1 1 8rem" color={strip.state === 'refused' ? 'state.stop' : 'ink'}>
-            {wordsFor(strip, online)}
+            <CodeWords>{wordsFor(strip, online)}</CodeWords>
           </Box>
           {strip.state === 'unsent' && strip.again && (
             <Button variant="outline" minH="11" onClick={strip.again}>

@@ -1,5 +1,6 @@
 import { Box, chakra, Flex } from '@chakra-ui/react';
 import { type ReactNode, useEffect } from 'react';
+import { CodeWords } from './code-words.js';
 
 interface Props {
   title: string;
@@ -17,11 +18,11 @@ export function PageHeading({ title, says, children }: Props) {
     <Flex wrap="wrap" gap="3" align="flex-end" justify="space-between" mb="5">
       <Box flex="1 1 16rem" minW="0">
         <chakra.h1 fontSize={{ base: 'figure', lg: 'title' }} fontWeight="700" lineHeight="1.2">
-          {title}
+          <CodeWords>{title}</CodeWords>
         </chakra.h1>
         {says && (
           <Box fontSize="lead" color="ink.muted">
-            {says}
+            <CodeWords>{says}</CodeWords>
           </Box>
         )}
       </Box>

@@ -1,9 +1,10 @@
 import { Box, chakra, Stack } from '@chakra-ui/react';
 import { type ComponentProps, useId } from 'react';
+import { ShapeMark } from './state-mark.js';
 
 interface Props extends Pick<ComponentProps<'input'>, 'name' | 'ref' | 'onChange' | 'onBlur'> {
   legend: string;
-  options: readonly { value: string; label: string; note?: string }[];
+  options: readonly { value: string; label: string; note?: string; isPast?: boolean }[];
   error?: string | undefined;
 }
 
@@ -32,7 +33,8 @@ export function RadioRows({ legend, options, error, ...field }: Props) {
             <span>
               {option.label}{' '}
               {option.note && (
-                <Box as="span" color="ink.muted">
+                <Box as="span" color={option.isPast ? 'state.stop' : 'ink.muted'}>
+                  {option.isPast && <ShapeMark shape="octagon" inline />}
                   {option.note}
                 </Box>
               )}

@@ -1,5 +1,6 @@
 import { Button, Dialog, Portal } from '@chakra-ui/react';
 import type { ReactNode, RefObject } from 'react';
+import { CodeWords } from './code-words.js';
 
 interface Props {
   open: boolean;
@@ -41,7 +42,7 @@ export function Sheet({ open, onClose, title, children, focusFirst }: Props) {
           >
             <Dialog.Header alignItems="center" justifyContent="space-between" px="4" py="2">
               <Dialog.Title fontSize="lead" fontWeight="700">
-                {title}
+                <CodeWords>{title}</CodeWords>
               </Dialog.Title>
               <Dialog.CloseTrigger asChild position="static">
                 <Button variant="plain" minH="11" minW="11">

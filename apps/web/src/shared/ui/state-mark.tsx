@@ -31,7 +31,7 @@ export const shapeOf = (verdict: Verdict): Shape => shapes[verdict];
 export const stateWord = (verdict: Verdict): string => words[verdict];
 
 /** The bare shape; the words beside it carry the meaning. */
-export function ShapeMark({ shape }: { shape: Shape }) {
+export function ShapeMark({ shape, inline = false }: { shape: Shape; inline?: boolean }) {
   if (shape === 'none') return null;
   const stop = shape === 'octagon';
   return (
@@ -40,6 +40,9 @@ export function ShapeMark({ shape }: { shape: Shape }) {
       w="4"
       h="4"
       flex="none"
+      display={inline ? 'inline-block' : 'block'}
+      verticalAlign="text-bottom"
+      me={inline ? '1' : '0'}
       aria-hidden="true"
       color={stop ? 'state.stop' : 'state.watch'}
     >

@@ -3,6 +3,7 @@ import type { NeedsYouRow } from '../../../shared/api/types.js';
 import { today } from '../../../shared/clock/web-clock.js';
 import { useDarkroom } from '../../../shared/darkroom/darkroom-context.js';
 import { showInstant } from '../../../shared/formats/instants.js';
+import { CodeWords } from '../../../shared/ui/code-words.js';
 import { ShapeMark } from '../../../shared/ui/state-mark.js';
 import { shapeOfEvent } from '../event-order.js';
 import { EventVerb } from './event-verb.js';
@@ -17,7 +18,9 @@ export function EventRow({ row }: { row: NeedsYouRow }) {
           <ShapeMark shape={shapeOfEvent(row.kind)} />
         </Box>
         <Box minW="0">
-          <Box fontSize="lead">{row.sentence}</Box>
+          <Box fontSize="lead">
+            <CodeWords>{row.sentence}</CodeWords>
+          </Box>
           <Box color="ink.muted">
             {row.why && `${row.why}. `}
             Since {showInstant(row.openedAt, zone, today(zone))}.

@@ -2,6 +2,7 @@ import { Button, Flex } from '@chakra-ui/react';
 import { useState } from 'react';
 import { useSearchParams } from 'react-router-dom';
 import { useMay } from '../../../shared/darkroom/darkroom-context.js';
+import { CodeWords } from '../../../shared/ui/code-words.js';
 import { HoldSheet } from '../../holds/components/hold-sheet.js';
 import { ReleaseSheet } from '../../holds/components/release-sheet.js';
 import { LazyLoadSheet } from '../../loads/components/lazy-load-sheet.js';
@@ -28,7 +29,7 @@ export function BottleActions({ standing }: { standing: Standing }) {
     <Flex gap="3" wrap="wrap">
       {takesFilm(standing) && !assessment.closed && (
         <Button minH="13" onClick={() => sheet.open([bottle.id])}>
-          Put a load through {code}
+          <CodeWords>{`Put a load through ${code}`}</CodeWords>
         </Button>
       )}
       {takesFilm(standing) && assessment.closed && (
@@ -39,7 +40,7 @@ export function BottleActions({ standing }: { standing: Standing }) {
           textDecoration="underline"
           onClick={() => sheet.open([bottle.id], true)}
         >
-          It has been through {code} already
+          <CodeWords>{`It has been through ${code} already`}</CodeWords>
         </Button>
       )}
       {stands && totals.hold === null && (

@@ -24,6 +24,8 @@ export function CountStepper({ count, format, onChange }: Props) {
   const [, unit] = pieces(format, count).split(' ');
   const [typed, setTyped] = useState<string | null>(null);
   const complaint = useId();
+  // As typed, until the count is changed by anything else.
+  const shown = typed !== null && countOf(typed) === count ? typed : String(count);
   const set = (next: number): void => {
     setTyped(null);
     onChange(next);
@@ -52,7 +54,7 @@ export function CountStepper({ count, format, onChange }: Props) {
             fontSize="title"
             fontWeight="700"
             borderColor="transparent"
-            value={count === 0 ? (typed ?? '') : String(count)}
+            value={shown}
             aria-invalid={count === 0}
             aria-describedby={count === 0 ? complaint : undefined}
             onFocus={(event) => event.target.select()}
@@ -79,7 +81,7 @@ export function CountStepper({ count, format, onChange }: Props) {
       </Flex>
       {count === 0 && (
         <Box id={complaint} role="alert" color="state.stop" fontWeight="600">
-          Whole rolls, 1 to {MOST}.
+          Whole {unit}, 1 to {MOST}.
         </Box>
       )}
     </Box>

@@ -3,6 +3,7 @@ import { type FormEvent, type KeyboardEvent, type RefObject, useRef } from 'reac
 import { useDarkroom } from '../../../shared/darkroom/darkroom-context.js';
 import { equivalence, filmPhrase, isSized } from '../../../shared/formats/film-words.js';
 import { paths } from '../../../shared/routes/paths.js';
+import { CodeWords } from '../../../shared/ui/code-words.js';
 import { TextLink } from '../../../shared/ui/links.js';
 import type { Standing } from '../../bottles/standing.js';
 import { usePutLoad } from '../api/put-load.js';
@@ -64,7 +65,9 @@ export function LoadForm({ load, baths, onDone, confirmRef }: Props) {
           <BathChips baths={baths} isIn={isIn} onToggle={(bath) => choice.toggle(bath, isIn(bath))} />
         ) : (
           only && (
-            <TextLink to={paths.bottle(address, only.bottle.code)}>All about {only.bottle.code}</TextLink>
+            <TextLink to={paths.bottle(address, only.bottle.code)}>
+              <CodeWords>{`All about ${only.bottle.code}`}</CodeWords>
+            </TextLink>
           )
         )}
         <CountStepper count={film.count} format={film.format} onChange={choice.setCount} />
@@ -81,7 +84,7 @@ export function LoadForm({ load, baths, onDone, confirmRef }: Props) {
             fontWeight="700"
             whiteSpace="normal"
           >
-            {plan.button}
+            <CodeWords>{plan.button}</CodeWords>
           </Button>
         )}
       </Stack>

@@ -4,6 +4,7 @@ import type { LogEntry } from '../../../shared/api/types.js';
 import { useDarkroom } from '../../../shared/darkroom/darkroom-context.js';
 import { showInstant, showTime } from '../../../shared/formats/instants.js';
 import { paths } from '../../../shared/routes/paths.js';
+import { CodeWords } from '../../../shared/ui/code-words.js';
 import { TextLink } from '../../../shared/ui/links.js';
 import { Tape } from '../../../shared/ui/tape.js';
 import { flagWords } from '../flag-words.js';
@@ -43,7 +44,7 @@ function Row({ entry, today }: { entry: LogEntry; today: LocalDate }) {
       </Box>
       <Box flex="1 1 14rem" minW="0">
         <chakra.span textDecoration={gone ? 'line-through' : 'none'}>
-          {action.by.displayName}: {sentence}
+          {action.by.displayName}: <CodeWords>{sentence}</CodeWords>
         </chakra.span>
         {gone && <Box color="ink.muted">↳ {gone}</Box>}
         {entry.flags.length > 0 && <Box color="ink.muted">{entry.flags.map(flagWords).join(', ')}</Box>}

@@ -1,13 +1,15 @@
-import { Box, chakra, Stack } from '@chakra-ui/react';
-import { type Container, type Material, roundLeftDown, showDate } from '@wetside/chemistry';
+import { Box, chakra, Flex, Stack } from '@chakra-ui/react';
+import { type Container, localDate, type Material, roundLeftDown, showDate } from '@wetside/chemistry';
 import type { ChemistryView } from '../../../shared/api/types.js';
 import { today } from '../../../shared/clock/web-clock.js';
 import { useNow } from '../../../shared/clock/use-now.js';
 import { useDarkroom } from '../../../shared/darkroom/darkroom-context.js';
 import { countOf } from '../../../shared/formats/amounts.js';
 import { sourceWords } from '../../../shared/formats/source-words.js';
+import { ShapeMark } from '../../../shared/ui/state-mark.js';
 import { Tape } from '../../../shared/ui/tape.js';
 import { hypotheticalBottle } from '../hypothetical-bottle.js';
+import { lateWords } from '../late-words.js';
 import { measureLines } from '../measure-words.js';
 import type { MixSource } from '../mix-sources.js';
 
@@ -31,6 +33,7 @@ export function MixPreview({ chemistry, source, volumeUl, container, material, h
   const rated = material ? future?.ratedE4[material] : null;
   const lastDay = future?.lastDay ?? null;
   const sources = sourceWords(document, future?.limits.flatMap((limit) => limit.sourceKeys) ?? []);
+  const late = lateWords(lastDay, localDate(happenedAt, darkroom.zone), today(darkroom.zone));
   const leaves = source.leaves(volumeUl);
   return (
     <Stack gap="1">
@@ -43,6 +46,12 @@ export function MixPreview({ chemistry, source, volumeUl, container, material, h
           : 'Capacity not known'}
         {lastDay ? `, until ${showDate(lastDay, today(darkroom.zone))}` : ', keeping time not known'}
       </Box>
+      {late && (
+        <Flex role="status" gap="2" align="baseline" color="state.stop" fontWeight="600">
+          <ShapeMark shape="octagon" />
+          <span>{late}</span>
+        </Flex>
+      )}
       {sources.map((words) => (
         <Box key={words} color="ink.muted">
           {words}

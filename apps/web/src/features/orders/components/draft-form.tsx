@@ -25,13 +25,16 @@ interface Props {
   onDirty: (dirty: boolean) => void;
 }
 
-/** What the counts as they are typed come to; null where one is no count or a price is not known. */
-function totalOf(order: OrderView, counts: DraftValues['counts']): number | null {
-  return order.lines.reduce<number | null>((sum, line, index) => {
-    const text = counts[index]?.count.trim() ?? '';
-    if (sum === null || line.priceMinor === null || !whole.test(text)) return null;
-    return sum + line.priceMinor * Number(text);
+/** What the counts as they are typed come to, or what to mend first. */
+function totalWords(order: OrderView, counts: DraftValues['counts']): string {
+  if (!counts.every(({ count }) => whole.test(count.trim())))
+    return 'The total follows whole packs, 0 to 999.';
+  const total = order.lines.reduce<number | null>((sum, line, index) => {
+    const count = Number(counts[index]?.count ?? line.count);
+    if (sum === null || count === 0) return sum;
+    return line.priceMinor === null ? null : sum + line.priceMinor * count;
   }, 0);
+  return `Total ${showMoney(total, order.currency)}`;
 }
 
 /** The counts and the note of a draft. A count of 0 takes the line out. */
@@ -85,7 +88,7 @@ export function DraftForm({ order, onDirty }: Props) {
         <TextField label="Note to the supplier" {...register('note')} />
         <FormError message={formState.errors.root?.message} />
         <Flex gap="3" wrap="wrap" justify="space-between" align="center">
-          <Box fontWeight="700">Total {showMoney(totalOf(order, counts), order.currency)}</Box>
+          <Box fontWeight="700">{totalWords(order, counts)}</Box>
           <Button
             type="submit"
             variant="outline"

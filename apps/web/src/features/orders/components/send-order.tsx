@@ -24,7 +24,7 @@ const packsOf = (order: OrderView): string => {
 
 /** Not undoable, so it is asked once, and what goes is named. */
 const goesWords = (order: OrderView): string =>
-  `Order ${order.numberText}, ${packsOf(order)}, ${showMoney(order.totalMinor, order.currency)}, goes to ${order.supplier.email}. It cannot be taken back.`;
+  `Send order ${order.numberText} to ${order.supplier.email}: ${packsOf(order)}, ${showMoney(order.totalMinor, order.currency)}? It cannot be taken back.`;
 
 /** The mail as it would go out, and the button that sends it. */
 export function SendOrder({ order, mailText, unsaved }: Props) {
@@ -32,7 +32,8 @@ export function SendOrder({ order, mailText, unsaved }: Props) {
   const sending = usePutOrderSending();
   const [actionId, setActionId] = useState(newId);
   const [problem, setProblem] = useState<string>();
-  const [asking, setAsking] = useState(false);
+  const [asked, setAsked] = useState(false);
+  const asking = asked && !unsaved;
   const send = async (): Promise<void> => {
     setProblem(undefined);
     try {
@@ -68,7 +69,7 @@ export function SendOrder({ order, mailText, unsaved }: Props) {
         <Box fontWeight="600">Save the draft first: this mail does not have your changes.</Box>
       )}
       {maySend && !asking && (
-        <Button minH="13" whiteSpace="normal" disabled={unsaved} onClick={() => setAsking(true)}>
+        <Button minH="13" whiteSpace="normal" disabled={unsaved} onClick={() => setAsked(true)}>
           Send the order
         </Button>
       )}
@@ -79,14 +80,13 @@ export function SendOrder({ order, mailText, unsaved }: Props) {
             <Button
               minH="13"
               whiteSpace="normal"
-              disabled={unsaved}
               loading={sending.isPending}
               loadingText="Sending"
               onClick={() => void send()}
             >
               Send {packsOf(order)}
             </Button>
-            <Button variant="outline" minH="13" onClick={() => setAsking(false)}>
+            <Button variant="outline" minH="13" onClick={() => setAsked(false)}>
               Not yet
             </Button>
           </Flex>

@@ -1,6 +1,10 @@
 import { Box, chakra, Grid } from '@chakra-ui/react';
-import type { UseFormReturn } from 'react-hook-form';
+import type { LocalDate } from '@wetside/chemistry';
+import { type UseFormReturn, useWatch } from 'react-hook-form';
 import type { ShelfPack } from '../../../shared/api/types.js';
+import { today } from '../../../shared/clock/web-clock.js';
+import { useDarkroom } from '../../../shared/darkroom/darkroom-context.js';
+import { ShapeMark } from '../../../shared/ui/state-mark.js';
 import { SelectField, TextField } from '../../../shared/ui/text-field.js';
 import { hasCome, type ReceiptForm } from '../receipt-form.js';
 
@@ -13,10 +17,22 @@ interface Props {
 }
 
 const whole = /^\d{1,3}$/;
+const isPast = (expiresOn: string, now: LocalDate): boolean => expiresOn !== '' && expiresOn < now;
+
+function PastDate() {
+  return (
+    <Box as="span" role="status" color="state.watch" fontWeight="600">
+      <ShapeMark shape="triangle" inline />
+      That date is past.
+    </Box>
+  );
+}
 
 /** What came of one pack: how many, which lot, until when. */
 export function ReceiptRowFields({ form, index, legend, packs }: Props) {
   const { register, formState, getValues } = form;
+  const { zone } = useDarkroom();
+  const expiresOn = useWatch({ control: form.control, name: `rows.${index}.expiresOn` });
   const errors = formState.errors.rows?.[index];
   const least = packs ? 1 : 0;
   return (
@@ -57,7 +73,8 @@ export function ReceiptRowFields({ form, index, legend, packs }: Props) {
           <TextField
             label="Expires"
             type="date"
-            help="Left open, it is guessed."
+            // A warning only: what came expired stands on the shelf all the same.
+            help={isPast(expiresOn, today(zone)) ? <PastDate /> : 'Left open, it is guessed.'}
             error={errors?.expiresOn?.message}
             {...register(`rows.${index}.expiresOn`)}
           />

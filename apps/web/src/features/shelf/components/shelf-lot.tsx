@@ -1,6 +1,8 @@
 import { Box } from '@chakra-ui/react';
 import { showDate, showVolume, type LocalDate } from '@wetside/chemistry';
 import type { Lot } from '../../../shared/api/types.js';
+import { ShapeMark } from '../../../shared/ui/state-mark.js';
+import { expiryWords, isExpired } from '../lot-expiry.js';
 
 interface Props {
   lot: Lot;
@@ -8,20 +10,20 @@ interface Props {
   useFirst: boolean;
 }
 
-const isExpired = ({ expiresOn }: Lot, today: LocalDate): boolean => expiresOn !== null && expiresOn < today;
-
-const expiryWords = ({ expiresOn, expiryIsGuess }: Lot, today: LocalDate): string => {
-  if (!expiresOn) return 'no expiry date known';
-  const past = expiresOn < today ? 'expired' : 'expires';
-  return `${past} ${showDate(expiresOn, today)}${expiryIsGuess ? ' (a guess)' : ''}`;
-};
-
 /** One lot: what stands there unopened, what is opened, until when. */
 export function ShelfLot({ lot, today, useFirst }: Props) {
   return (
     <Box as="li" py="1">
-      lot {lot.lotNumber}: {lot.unopened} unopened, {expiryWords(lot, today)}
-      {useFirst && !isExpired(lot, today) && <Box as="strong"> use first</Box>}
+      lot {lot.lotNumber}: {lot.unopened} unopened,{' '}
+      {isExpired(lot, today) ? (
+        <Box as="span" color="state.stop" fontWeight="600" whiteSpace="nowrap">
+          <ShapeMark shape="octagon" inline />
+          {expiryWords(lot, today)}
+        </Box>
+      ) : (
+        expiryWords(lot, today)
+      )}
+      {useFirst && <Box as="strong"> use first</Box>}
       {lot.opened.map((opened) => (
         <Box key={opened.id} ps="4">
           opened {showDate(opened.openedOn, today)}, {opened.partName}:{' '}

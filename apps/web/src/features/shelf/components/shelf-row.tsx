@@ -7,6 +7,7 @@ import { FormError } from '../../../shared/ui/form-error.js';
 import { ShapeMark } from '../../../shared/ui/state-mark.js';
 import { supplierFor } from '../../orders/to-order.js';
 import { useDraftOrder } from '../../orders/use-draft-order.js';
+import { byExpiry, lotToUseFirst } from '../lot-expiry.js';
 import { ShelfLot } from './shelf-lot.js';
 
 interface Props {
@@ -27,8 +28,8 @@ export function ShelfRow({ pack, today }: Props) {
   const draft = useDraftOrder();
   const soldBy = supplierFor(pack, today);
   const makes = [...new Set(pack.makes.map(({ chemistryName }) => chemistryName))];
-  const lots = [...pack.lots].sort((a, b) => (a.expiresOn ?? '9999').localeCompare(b.expiresOn ?? '9999'));
-  const several = lots.filter(({ unopened, opened }) => unopened > 0 || opened.length > 0).length > 1;
+  const lots = [...pack.lots].sort(byExpiry);
+  const first = lotToUseFirst(lots, today);
   return (
     <Box as="li" py="4" borderTopWidth="1px" borderColor="line">
       <Flex gap="3" wrap="wrap" justify="space-between" align="flex-start">
@@ -68,8 +69,8 @@ export function ShelfRow({ pack, today }: Props) {
       </Flex>
       {draft.problem && <FormError message={draft.problem} />}
       <chakra.ul listStyleType="none" ps="4" mt="2" aria-label={`Lots of ${pack.name}`}>
-        {lots.map((lot, index) => (
-          <ShelfLot key={lot.id} lot={lot} today={today} useFirst={several && index === 0} />
+        {lots.map((lot) => (
+          <ShelfLot key={lot.id} lot={lot} today={today} useFirst={lot === first} />
         ))}
       </chakra.ul>
     </Box>
