@@ -105,6 +105,8 @@ export const mails = pgTable(
     /** Not before this: grace at first, back-off after a failure. */
     dueAt: instant('due_at').notNull(),
     attempts: integer('attempts').notNull(),
+    /** Tries of which nobody knows how they ended: the mail may have arrived by each of them too. */
+    unclearTries: integer('unclear_tries').notNull().default(0),
     leaseUntil: instant('lease_until'),
     leaseId: uuid('lease_id'),
     lastAnswer: text('last_answer'),

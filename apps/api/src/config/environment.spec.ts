@@ -22,7 +22,10 @@ describe('the environment', () => {
       host: '127.0.0.1',
       publicOrigin: 'http://localhost:3000',
       clockOffset: 0,
+      mailBackoffS: 30,
+      mailDeadlineS: 40,
       webDist: null,
+      limits: { lockMs: 5_000, statementMs: 15_000, idleMs: 30_000, waitMs: 5_000, transactionMs: 30_000 },
     });
     expect(demo.sessionSecret).toHaveLength(64);
   });
@@ -47,6 +50,9 @@ describe('the environment', () => {
     [{ ...DATABASE, CLOCK_OFFSET: 'P1M' }, 'CLOCK_OFFSET'],
     [{ ...DATABASE, HOST: '0.0.0.0' }, 'HOST'],
     [{ ...DATABASE, PORT: '80x' }, 'PORT'],
+    [{ ...DATABASE, MAIL_BACKOFF_S: '1h' }, 'MAIL_BACKOFF_S must be a whole number from 0 to 3600.'],
+    [{ ...REAL, MAIL_DEADLINE_S: '60' }, 'MAIL_DEADLINE_S must be a whole number from 1 to 50.'],
+    [{ ...DATABASE, DATABASE_LOCK_MS: '5s' }, 'DATABASE_LOCK_MS must be a whole number from 10 to 600000.'],
     [{ ...DATABASE, MODE: 'production' }, 'MODE'],
     [{ ...DATABASE, DATABASE_URL: 'secret-pw@nowhere' }, 'DATABASE_URL'],
   ])('stops the start with a sentence: %#', (variables, word) => {

@@ -7,6 +7,20 @@ export type Mode = (typeof MODES)[number];
 export const LOG_LEVELS = ['silent', 'fatal', 'error', 'warn', 'info', 'debug', 'trace'] as const;
 export type LogLevel = (typeof LOG_LEVELS)[number];
 
+/** How long a request waits for the database before it is answered without it; milliseconds. */
+export interface DatabaseLimits {
+  /** For a row that somebody else holds. */
+  lockMs: number;
+  /** For one statement. */
+  statementMs: number;
+  /** Between two statements of one transaction. */
+  idleMs: number;
+  /** For a free connection, and for a new one to be made. */
+  waitMs: number;
+  /** For a whole transaction, by the server's own watch: it holds when the database says nothing at all. */
+  transactionMs: number;
+}
+
 /** The process's settings, read once. A class, so that Nest can hand it out by its type. */
 export class Environment {
   mode: Mode;
@@ -19,6 +33,7 @@ export class Environment {
   databaseUrl: string;
   databaseJobsUrl: string;
   databasePool: number;
+  limits: DatabaseLimits;
   smtpUrl: string;
   mailFrom: string;
   sessionSecret: string;
@@ -28,6 +43,10 @@ export class Environment {
   clockOffset: number;
   /** Seconds a mail waits before it is sent, so that an undo can still withdraw it. */
   mailGraceS: number;
+  /** Seconds to wait after a mail's first failure; later ones wait longer. */
+  mailBackoffS: number;
+  /** Seconds for the whole conversation with the mail server, from dialling to its last answer. */
+  mailDeadlineS: number;
   /** Seconds between two sweeps. */
   sweepS: number;
   logLevel: LogLevel;
@@ -53,6 +72,7 @@ export function readEnvironment(variables: Variables = process.env): Environment
   e.databaseUrl = read.url('DATABASE_URL', ['postgres:', 'postgresql:']);
   e.databaseJobsUrl = read.url('DATABASE_JOBS_URL', ['postgres:', 'postgresql:']);
   e.databasePool = read.whole('DATABASE_POOL', { min: 1, max: 100, otherwise: 10 });
+  e.limits = readLimits(read);
   e.smtpUrl = read.url(
     'SMTP_URL',
     ['smtp:', 'smtps:'],
@@ -66,12 +86,27 @@ export function readEnvironment(variables: Variables = process.env): Environment
   e.webDist = read.textOrNull('WEB_DIST');
   e.clockOffset = readClockOffset(read, e.mode);
   e.mailGraceS = read.whole('MAIL_GRACE_S', { min: 0, max: 86_400, otherwise: 60 });
+  e.mailBackoffS = read.whole('MAIL_BACKOFF_S', { min: 0, max: 3_600, otherwise: 30 });
+  // Below the lease of a minute: whoever holds a lease has let go of the socket before another may take it.
+  e.mailDeadlineS = read.whole('MAIL_DEADLINE_S', { min: 1, max: 50, otherwise: 40 });
   e.sweepS = read.whole('SWEEP_S', { min: 1, max: 86_400, otherwise: 30 });
   e.logLevel = read.choice('LOG_LEVEL', LOG_LEVELS, e.mode === 'test' ? 'silent' : 'info');
   e.background = true;
   refuseOpenDemo(read, e);
   read.finish();
   return e;
+}
+
+function readLimits(read: Reader): DatabaseLimits {
+  const ms = (name: string, otherwise: number) =>
+    read.whole(`DATABASE_${name}_MS`, { min: 10, max: 600_000, otherwise });
+  return {
+    lockMs: ms('LOCK', 5_000),
+    statementMs: ms('STATEMENT', 15_000),
+    idleMs: ms('IDLE', 30_000),
+    waitMs: ms('WAIT', 5_000),
+    transactionMs: ms('TRANSACTION', 30_000),
+  };
 }
 
 function readOrigin(read: Reader, e: Environment): string {

@@ -73,7 +73,7 @@ describe('what a warning says', () => {
   it('names who put it on hold, and since when', () => {
     expect(words([HOLD], ['on-hold'], '2026-03-05', 'Tomas')).toMatchObject({
       sentence: 'FX-31 fixer is on hold by Tomas: cloudy',
-      why: 'Nobody should load it since 3 Mar',
+      why: 'On hold since 3 Mar: nobody should load it',
     });
   });
 
@@ -154,7 +154,7 @@ describe('a warning as a mail', () => {
     });
     expect(mail.subject).toMatch(/^FX-31 fixer is on hold: smells Bcc: x y+…$/);
     expect(mail.body).toContain(
-      'Why: Nobody should load it since 3 Mar.\nWhat to do: Test it, then release it or discard it.',
+      'Why: On hold since 3 Mar: nobody should load it.\nWhat to do: Test it, then release it or discard it.',
     );
     expect(mail.body).toContain('\nhttps://darkroom.example/d/cellar/bottles/FX-31\n');
     expect(mail.body).toContain('https://darkroom.example/d/cellar/needs-you');

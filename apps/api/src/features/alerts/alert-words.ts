@@ -86,7 +86,7 @@ function holdWords(
   const since = hold ? showDate(localDate(hold.since, zone), today) : '';
   return {
     sentence: `${name} is on hold${holdBy ? ` by ${holdBy}` : ''}${hold ? `: ${hold.reason}` : ''}`,
-    why: `Nobody should load it${since ? ` since ${since}` : ''}`,
+    why: `On hold${since ? ` since ${since}` : ''}: nobody should load it`,
     advice: 'Test it, then release it or discard it.',
   };
 }

@@ -34,6 +34,7 @@ describe('warnings', () => {
     const variables = {
       SMTP_URL: `smtp://127.0.0.1:${catcher.smtpPort}`,
       MAIL_GRACE_S: String(graceS),
+      MAIL_BACKOFF_S: '0',
       SWEEP_S: '86400',
     };
     test = await TestApp.start(variables);
@@ -43,12 +44,6 @@ describe('warnings', () => {
     membershipId = await test.join(darkroomId, await test.person('Ines'), 'member');
   }
 
-  beforeAll(() => {
-    process.env.MAIL_BACKOFF_S = '0';
-  });
-  afterAll(() => {
-    delete process.env.MAIL_BACKOFF_S;
-  });
   afterEach(async () => {
     await test.close();
     await catcher.close();

@@ -27,11 +27,14 @@ describe('the delivery of mail', () => {
     variables: Record<string, string>,
     { backoffS = 0, deadlineS = 40 } = {},
   ): Promise<void> {
-    process.env.MAIL_BACKOFF_S = String(backoffS);
-    process.env.MAIL_DEADLINE_S = String(deadlineS);
     catcher = await startMailCatcher({ smtpPort: 0, httpPort: 0 });
-    const smtp = { SMTP_URL: `smtp://127.0.0.1:${catcher.smtpPort}`, SWEEP_S: '86400' };
-    given = { ...smtp, ...variables };
+    given = {
+      SMTP_URL: `smtp://127.0.0.1:${catcher.smtpPort}`,
+      SWEEP_S: '86400',
+      MAIL_BACKOFF_S: String(backoffS),
+      MAIL_DEADLINE_S: String(deadlineS),
+      ...variables,
+    };
     test = await TestApp.start(given);
     darkroomId = await test.darkroom('cellar', await test.person('Ada'));
     membershipId = await test.join(darkroomId, await test.person('Tomas'), 'technician');
@@ -42,10 +45,6 @@ describe('the delivery of mail', () => {
     second = null;
     await test.close();
     await catcher.close();
-  });
-  afterAll(() => {
-    delete process.env.MAIL_DEADLINE_S;
-    delete process.env.MAIL_BACKOFF_S;
   });
 
   /** Another server on the same database. */
@@ -138,6 +137,10 @@ describe('the delivery of mail', () => {
     await allSent(2);
     expect(catcher.messages()).toHaveLength(3);
     expect(new Set(catcher.messages().map(({ messageId }) => messageId)).size).toBe(2);
+    expect((await rows()).map(({ unclearTries }) => unclearTries).sort()).toEqual([0, 1]);
+    const browser = await test.signedIn({ personId: '', email: 'ada@darkroom.example', name: 'Ada' });
+    const { body } = await browser.get('/api/darkrooms/cellar/needs-you').expect(200);
+    expect(body.open[0].why).toContain('Mailed to 2. 1 mail may have arrived twice');
   });
 
   it('loses nothing while the mail server is away', async () => {

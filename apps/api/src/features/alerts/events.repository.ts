@@ -63,6 +63,7 @@ export class EventsRepository {
         membershipId: notices.membershipId,
         mailId: notices.mailId,
         mailState: mails.state,
+        unclearTries: mails.unclearTries,
       })
       .from(notices)
       .innerJoin(mails, and(eq(mails.darkroomId, notices.darkroomId), eq(mails.id, notices.mailId)))

@@ -7,6 +7,7 @@ const told = (kind: EventKind, mailState: Told['mailState'], member = 'ada'): To
   membershipId: member,
   mailId: `m-${kind}-${member}`,
   mailState,
+  unclearTries: 0,
 });
 const nothing = { tellAll: false, wake: [], reword: [], add: [], withdraw: [] };
 

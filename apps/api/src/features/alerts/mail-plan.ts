@@ -12,6 +12,8 @@ export interface Told {
   membershipId: string;
   mailId: string;
   mailState: (typeof mailStates)[number];
+  /** Tries by which the mail may have arrived though no answer said so. */
+  unclearTries: number;
 }
 
 export interface NewNotice {

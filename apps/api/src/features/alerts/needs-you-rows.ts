@@ -30,17 +30,28 @@ function verbOf(kind: EventKind, open: readonly OpenRow[]): Verb {
   return verbs[kind] ?? 'look';
 }
 
-/** 'mailed to 3, 1 mail could not be delivered'. */
-function mailWords(told: readonly Told[]): { mailedTo: number; text: string } {
-  const people = (state: Told['mailState']) =>
-    new Set(told.filter(({ mailState }) => mailState === state).map(({ membershipId }) => membershipId)).size;
-  const [mailedTo, failed] = [people('sent'), people('failed')];
+/** 'Mailed to 3. 1 mail may have arrived twice. 1 mail could not be delivered'. */
+export function mailWords(told: readonly Told[]): { mailedTo: number; text: string } {
+  const people = (holds: (one: Told) => boolean) =>
+    new Set(told.filter(holds).map(({ membershipId }) => membershipId)).size;
+  const unclear = ({ unclearTries }: Told) => unclearTries > 0;
+  const mailedTo = people(({ mailState }) => mailState === 'sent');
+  const clauses: [number, string][] = [
+    [people((one) => one.mailState === 'sent' && unclear(one)), 'may have arrived twice'],
+    [people((one) => onItsWay(one) && unclear(one)), 'may have arrived and will be sent once more'],
+    [people((one) => one.mailState === 'failed' && unclear(one)), 'may have arrived, no answer said so'],
+    [people((one) => one.mailState === 'failed' && !unclear(one)), 'could not be delivered'],
+  ];
   const text = [
     ...(mailedTo > 0 ? [`Mailed to ${mailedTo}`] : []),
-    ...(failed > 0 ? [`${failed} ${failed === 1 ? 'mail' : 'mails'} could not be delivered`] : []),
+    ...clauses.flatMap(([count, words]) =>
+      count > 0 ? [`${count} ${count === 1 ? 'mail' : 'mails'} ${words}`] : [],
+    ),
   ].join('. ');
   return { mailedTo, text };
 }
+
+const onItsWay = ({ mailState }: Told): boolean => mailState === 'waiting' || mailState === 'leased';
 
 function about(subject: Subject): Pick<NeedsYouRowView, 'bottle' | 'pack' | 'load'> {
   if (subject.of === 'bottle') {

@@ -70,7 +70,7 @@ export function toOrderView({ detail, lines, mail }: WholeOrder): OrderView {
     sentAt: order.sentAt?.toISOString() ?? null,
     totalMinor: totalMinor(lines),
     lines: lines.map(({ orderId: _order, position: _position, ...line }) => line),
-    mail: mail && { state: mail.state, lastAnswer: mail.lastAnswer },
+    mail: mail && { state: mail.state, lastAnswer: mail.lastAnswer, unclearTries: mail.unclearTries },
   };
 }
 

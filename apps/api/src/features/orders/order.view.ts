@@ -51,6 +51,9 @@ export class OrderMailView {
 
   @ApiProperty({ type: String, nullable: true, description: 'What the mail server said last.' })
   lastAnswer: string | null;
+
+  @ApiProperty({ description: 'Tries by which the mail may have arrived though no answer said so.' })
+  unclearTries: number;
 }
 
 export class OrderView {

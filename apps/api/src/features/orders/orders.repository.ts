@@ -90,6 +90,7 @@ export class OrdersRepository {
         orderId: mails.orderId,
         state: mails.state,
         lastAnswer: mails.lastAnswer,
+        unclearTries: mails.unclearTries,
         body: mails.body,
       })
       .from(mails)

@@ -1,5 +1,4 @@
 import { Global, Module } from '@nestjs/common';
-import { MailSettings, readMailSettings } from './mail-settings.js';
 import { Mailer } from './mailer.js';
 import { MailsRepository } from './mails.repository.js';
 import { OutgoingMail } from './outgoing-mail.service.js';
@@ -7,13 +6,7 @@ import { SendMailTask } from './send-mail.task.js';
 
 @Global()
 @Module({
-  providers: [
-    { provide: MailSettings, useFactory: () => readMailSettings() },
-    Mailer,
-    MailsRepository,
-    OutgoingMail,
-    SendMailTask,
-  ],
+  providers: [Mailer, MailsRepository, OutgoingMail, SendMailTask],
   exports: [OutgoingMail, SendMailTask],
 })
 export class MailModule {}

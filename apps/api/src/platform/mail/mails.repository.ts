@@ -13,6 +13,12 @@ export interface MailKey {
 
 const isIt = ({ darkroomId, mailId }: MailKey) => and(eq(mails.darkroomId, darkroomId), eq(mails.id, mailId));
 
+/** What came of a try. */
+export type Outcome = Partial<Pick<MailRow, 'state' | 'dueAt' | 'sentAt' | 'lastAnswer'>> & {
+  /** The mail may have arrived though no answer said so. */
+  unclear?: boolean;
+};
+
 /** Waiting and due, or leased by somebody who is gone. */
 export const isDue = (now: Date) =>
   or(
@@ -74,10 +80,16 @@ export class MailsRepository {
       .where(isIt(key));
   }
 
+  /** A lease that is taken over was never marked: how far its holder came is not known, and is counted. */
   async lease(tx: Tx, key: MailKey, lease: { leaseId: string; leaseUntil: Date }): Promise<void> {
     await tx
       .update(mails)
-      .set({ state: 'leased', ...lease, attempts: sql`${mails.attempts} + 1` })
+      .set({
+        state: 'leased',
+        ...lease,
+        attempts: sql`${mails.attempts} + 1`,
+        unclearTries: sql`${mails.unclearTries} + case when ${mails.state} = 'leased' then 1 else 0 end`,
+      })
       .where(isIt(key));
   }
 
@@ -85,15 +97,15 @@ export class MailsRepository {
    * What came of a try, if the lease is still one's own.
    * @returns false when another has taken the mail over
    */
-  async settle(
-    tx: Tx,
-    key: MailKey,
-    leaseId: string,
-    outcome: Partial<Pick<MailRow, 'state' | 'dueAt' | 'sentAt' | 'lastAnswer'>>,
-  ): Promise<boolean> {
+  async settle(tx: Tx, key: MailKey, leaseId: string, { unclear, ...outcome }: Outcome): Promise<boolean> {
     const changed = await tx
       .update(mails)
-      .set({ ...outcome, leaseId: null, leaseUntil: null })
+      .set({
+        ...outcome,
+        unclearTries: sql`${mails.unclearTries} + ${unclear ? 1 : 0}`,
+        leaseId: null,
+        leaseUntil: null,
+      })
       .where(and(isIt(key), eq(mails.state, 'leased'), eq(mails.leaseId, leaseId)))
       .returning({ id: mails.id });
     return changed.length > 0;

@@ -1,13 +1,13 @@
 import { Injectable, Logger, type OnModuleInit } from '@nestjs/common';
 import { randomUUID } from 'node:crypto';
+import { Environment } from '../../config/environment.js';
 import { Clock } from '../clock/clock.js';
 import { Database, type Tx } from '../database/database.js';
 import { JobTasks } from '../jobs/job-tasks.js';
 import { NextCheck } from '../jobs/next-check.js';
 import { waitAfter } from './back-off.js';
-import { MailSettings } from './mail-settings.js';
-import { Mailer } from './mailer.js';
-import { MailsRepository, type MailKey, type MailRow } from './mails.repository.js';
+import { Mailer, type Sent } from './mailer.js';
+import { MailsRepository, type MailKey, type MailRow, type Outcome } from './mails.repository.js';
 import { OutgoingMail } from './outgoing-mail.service.js';
 import { parseSendMail, SEND_MAIL } from './send-mail.job.js';
 
@@ -21,11 +21,10 @@ interface Leased {
   attempts: number;
 }
 
-type Outcome = { ok: boolean; answer: string };
-
 /**
  * Sends one mail, if it is this one's turn. The queue may name a mail twice, late or never; the row decides. A server
- * that dies between the end of the mail and the mark leaves a dead lease: the same Message-ID goes out once more.
+ * that dies between the end of the mail and the mark leaves a dead lease: the same Message-ID goes out once more, and
+ * that is counted.
  */
 @Injectable()
 export class SendMailTask implements OnModuleInit {
@@ -39,7 +38,7 @@ export class SendMailTask implements OnModuleInit {
     private readonly mailer: Mailer,
     private readonly outgoing: OutgoingMail,
     private readonly nextCheck: NextCheck,
-    private readonly settings: MailSettings,
+    private readonly environment: Environment,
   ) {}
 
   onModuleInit(): void {
@@ -49,8 +48,7 @@ export class SendMailTask implements OnModuleInit {
   async run(key: MailKey): Promise<void> {
     const leased = await this.lease(key);
     if (!leased) return;
-    const outcome = await this.speak(leased.row);
-    await this.mark(key, leased, outcome);
+    await this.mark(key, leased, await this.mailer.send(leased.row));
   }
 
   private lease(key: MailKey): Promise<Leased | null> {
@@ -83,26 +81,24 @@ export class SendMailTask implements OnModuleInit {
     return isCancelled ? 'the order was cancelled' : null;
   }
 
-  private async speak(row: MailRow): Promise<Outcome> {
-    try {
-      return { ok: true, answer: await this.mailer.send(row) };
-    } catch (error) {
-      return { ok: false, answer: error instanceof Error ? error.message : String(error) };
-    }
-  }
-
-  private mark(key: MailKey, { row, leaseId, attempts }: Leased, { ok, answer }: Outcome): Promise<void> {
+  private mark(key: MailKey, { row, leaseId, attempts }: Leased, sent: Sent): Promise<void> {
     return this.database.inDarkroom({ darkroomId: key.darkroomId }, async (tx) => {
       const now = this.clock.now();
-      const lastAnswer = answer.slice(0, ANSWER_LENGTH);
-      const set = (outcome: Parameters<MailsRepository['settle']>[3]) =>
-        this.repository.settle(tx, key, leaseId, { lastAnswer, ...outcome });
-      if (ok) {
+      const lastAnswer = sent.answer.slice(0, ANSWER_LENGTH);
+      const unclear = !sent.ok && sent.unclear;
+      const set = async (outcome: Omit<Outcome, 'unclear'>): Promise<boolean> => {
+        const own = await this.repository.settle(tx, key, leaseId, { lastAnswer, unclear, ...outcome });
+        // Nothing to count here: whoever took the lease over has counted this try as one of unclear end.
+        if (!own) this.log.warn(`Mail ${row.messageId}, try ${attempts}: its lease had run out meanwhile.`);
+        return own;
+      };
+      if (sent.ok) {
         await set({ state: 'sent', sentAt: now });
         return;
       }
-      const wait = waitAfter(attempts, this.settings.backoffS);
-      this.log.warn(`Mail ${row.messageId}, try ${attempts}: ${lastAnswer}`);
+      const wait = waitAfter(attempts, this.environment.mailBackoffS);
+      const arrived = unclear ? ' It may have arrived nevertheless.' : '';
+      this.log.warn(`Mail ${row.messageId}, try ${attempts}: ${lastAnswer}${arrived}`);
       if (wait === null) {
         await set({ state: 'failed' });
         return;

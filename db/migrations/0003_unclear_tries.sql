@@ -1,0 +1,1 @@
+ALTER TABLE "mails" ADD COLUMN "unclear_tries" integer DEFAULT 0 NOT NULL;
