@@ -10,15 +10,18 @@ import { ORIGIN, SECRET } from './test-app.js';
 import { until } from './until.js';
 
 /** Neither __dirname nor import.meta exists under both Jest and Node: the checkout is where its packages resolve. */
-const root = dirname(
+export const checkout = dirname(
   dirname(createRequire(join(process.cwd(), 'package.json')).resolve('@wetside/db/package.json')),
 );
 
 /** The built server's folder; built now if it is not there. */
 export function builtProgram(): string {
-  const dist = join(root, 'apps/api/dist');
+  const dist = join(checkout, 'apps/api/dist');
   if (!existsSync(join(dist, 'main.js'))) {
-    execFileSync(join(root, 'node_modules/.bin/tsc'), ['-b', join(root, 'apps/api/tsconfig.build.json')]);
+    execFileSync(join(checkout, 'node_modules/.bin/tsc'), [
+      '-b',
+      join(checkout, 'apps/api/tsconfig.build.json'),
+    ]);
   }
   return dist;
 }
@@ -29,8 +32,8 @@ export class Mutant {
 
   /** @throws Error when the text stands there not exactly once */
   static async make(file: string, text: string): Promise<Mutant> {
-    await mkdir(join(root, '.local'), { recursive: true });
-    const mutant = new Mutant(await mkdtemp(join(root, '.local/mutant-')));
+    await mkdir(join(checkout, '.local'), { recursive: true });
+    const mutant = new Mutant(await mkdtemp(join(checkout, '.local/mutant-')));
     await cp(builtProgram(), mutant.folder, { recursive: true });
     const path = join(mutant.folder, file);
     const parts = (await readFile(path, 'utf8')).split(text);
@@ -97,7 +100,7 @@ async function answers(url: string): Promise<boolean> {
   }
 }
 
-async function freePort(): Promise<number> {
+export async function freePort(): Promise<number> {
   const server = createServer().listen(0, '127.0.0.1');
   await once(server, 'listening');
   const { port } = server.address() as AddressInfo;

@@ -1,6 +1,6 @@
 import { hash, verify } from '@node-rs/argon2';
 import { Injectable } from '@nestjs/common';
-import { Turnstile } from './turnstile.js';
+import { Turnstile } from '../turnstile/turnstile.js';
 
 /** OWASP's figures for argon2id (the library's default kind): 19 MiB, two passes, one lane. */
 const ARGON2 = { memoryCost: 19_456, timeCost: 2, parallelism: 1 } as const;

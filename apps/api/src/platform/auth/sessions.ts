@@ -1,4 +1,4 @@
-import { Injectable } from '@nestjs/common';
+import { Injectable, Logger } from '@nestjs/common';
 import { v7 } from 'uuid';
 import { Clock } from '../clock/clock.js';
 import { Database, type Tx } from '../database/database.js';
@@ -13,6 +13,8 @@ export interface Keys {
 
 @Injectable()
 export class Sessions {
+  private readonly logger = new Logger('sign-in');
+
   constructor(
     private readonly database: Database,
     private readonly clock: Clock,
@@ -49,6 +51,7 @@ export class Sessions {
       if (!session || !token) return null;
       if (token.supersededAt !== null) {
         await this.repository.end(tx, session.id, 'reuse', now);
+        this.logger.warn({ personId: session.personId }, 'a used token came back: the session ended');
         return null;
       }
       await this.repository.use(tx, token, now);

@@ -1,14 +1,13 @@
 import { Injectable, type OnApplicationShutdown } from '@nestjs/common';
-import * as schema from '@wetside/db';
 import { sql } from 'drizzle-orm';
-import { drizzle, type PostgresJsDatabase } from 'drizzle-orm/postgres-js';
-import postgres from 'postgres';
 import { Environment } from '../../config/environment.js';
-import { isWorthAnotherTry } from './sql-errors.js';
+import { problem } from '../errors/problem.js';
+import { NoPlace, Turnstile } from '../turnstile/turnstile.js';
+import { Pool, type Tx } from './pool.js';
+import { isAboutConnection, isWorthAnotherTry } from './sql-errors.js';
+import { within } from './within.js';
 
-type Schema = typeof schema;
-/** An open transaction; every repository method takes one, so that no query can slip outside it. */
-export type Tx = Parameters<Parameters<PostgresJsDatabase<Schema>['transaction']>[0]>[0];
+export type { Tx } from './pool.js';
 
 export interface DarkroomScope {
   darkroomId: string;
@@ -20,24 +19,21 @@ export interface TransactionOptions {
 }
 
 const TRIES = 3;
+/** Requests that may wait for each connection: more would only wait in vain. */
+const LINE = 50;
 
 @Injectable()
 export class Database implements OnApplicationShutdown {
-  private readonly client: postgres.Sql;
-  private readonly db: PostgresJsDatabase<Schema>;
+  private readonly places: Turnstile;
+  private readonly pools = new Set<Pool>();
+  private pool: Pool;
+  private stopped = false;
 
   /** Connects with the first query, not here. */
-  constructor(environment: Environment) {
-    this.client = postgres(environment.databaseUrl, {
-      max: environment.databasePool,
-      onnotice: () => undefined,
-      connection: {
-        application_name: 'wetside-api',
-        statement_timeout: 15_000,
-        idle_in_transaction_session_timeout: 30_000,
-      },
-    });
-    this.db = drizzle(this.client, { schema });
+  constructor(private readonly environment: Environment) {
+    const { databasePool, limits } = environment;
+    this.places = new Turnstile(databasePool, { length: databasePool * LINE, waitMs: limits.waitMs });
+    this.pool = this.newPool();
   }
 
   /**
@@ -64,7 +60,8 @@ export class Database implements OnApplicationShutdown {
   }
 
   async onApplicationShutdown(): Promise<void> {
-    await this.client.end({ timeout: 5 });
+    this.stopped = true;
+    await Promise.all([...this.pools].map((pool) => pool.close(5)));
   }
 
   private async run<T>(
@@ -73,22 +70,53 @@ export class Database implements OnApplicationShutdown {
     work: (tx: Tx) => Promise<T>,
     options: TransactionOptions,
   ): Promise<T> {
+    const scoped = async (tx: Tx): Promise<T> => {
+      if (darkroomId || personId) {
+        await tx.execute(
+          sql`select set_config('app.darkroom', ${darkroomId}, true), set_config('app.person', ${personId}, true)`,
+        );
+      }
+      return work(tx);
+    };
     for (let attempt = 1; ; attempt += 1) {
       try {
-        return await this.db.transaction(
-          async (tx) => {
-            if (darkroomId || personId) {
-              await tx.execute(
-                sql`select set_config('app.darkroom', ${darkroomId}, true), set_config('app.person', ${personId}, true)`,
-              );
-            }
-            return work(tx);
-          },
-          options.readOnly ? { accessMode: 'read only' } : undefined,
-        );
+        return await this.transact(scoped, options);
       } catch (error) {
         if (attempt >= TRIES || !isWorthAnotherTry(error)) throw error;
       }
     }
+  }
+
+  /** Its place is given back when the transaction has ended, which may be after the answer was given up. */
+  private async transact<T>(work: (tx: Tx) => Promise<T>, options: TransactionOptions): Promise<T> {
+    const leave = await this.place();
+    const { pool } = this;
+    const ended = pool.transaction(options.readOnly ? 'read only' : 'read write', work).finally(leave);
+    try {
+      return await within(this.environment.limits.transactionMs, ended);
+    } catch (error) {
+      if (isAboutConnection(error)) this.replace(pool);
+      throw error;
+    }
+  }
+
+  private async place(): Promise<() => void> {
+    try {
+      return await this.places.enter();
+    } catch (error) {
+      throw error instanceof NoPlace ? problem('busy') : error;
+    }
+  }
+
+  private replace(pool: Pool): void {
+    if (pool !== this.pool || this.stopped) return;
+    this.pool = this.newPool();
+    void pool.retire(this.environment.limits.transactionMs).then(() => this.pools.delete(pool));
+  }
+
+  private newPool(): Pool {
+    const pool = new Pool(this.environment);
+    this.pools.add(pool);
+    return pool;
   }
 }

@@ -1,5 +1,8 @@
 import type { ProblemKind } from './problem-kind.js';
 
+/** True of every action: its id makes it count once. */
+const AGAIN = 'Nothing is lost: send it again in a moment.';
+
 export const generalProblems = {
   invalid: {
     status: 400,
@@ -9,7 +12,12 @@ export const generalProblems = {
   malformed: {
     status: 400,
     title: 'Not readable',
-    detail: () => 'What was sent is not well-formed JSON.',
+    detail: () => 'What was sent cannot be read: its JSON, or an escape in its address, is broken.',
+  },
+  'not-json': {
+    status: 415,
+    title: 'Not JSON',
+    detail: () => 'Send it as application/json, in UTF-8, as it is or zipped with gzip.',
   },
   'signed-out': {
     status: 401,
@@ -54,6 +62,27 @@ export const generalProblems = {
   unavailable: {
     status: 503,
     title: 'Not ready',
-    detail: () => 'The server cannot reach its database. Try again in a moment.',
+    detail: () => `The server cannot reach its database just now. ${AGAIN}`,
+  },
+  interrupted: {
+    status: 503,
+    title: 'Broken off',
+    detail: () =>
+      'The database went away in the middle of this. Send it again in a moment: it counts once, however often it is sent.',
+  },
+  busy: {
+    status: 503,
+    title: 'Busy',
+    detail: () => `The server has more to do just now than it can. ${AGAIN}`,
+  },
+  'held-up': {
+    status: 503,
+    title: 'Held up',
+    detail: () => `Something else is being recorded in the same place and takes long. ${AGAIN}`,
+  },
+  'too-slow': {
+    status: 503,
+    title: 'Took too long',
+    detail: () => `This took longer than it may and was given up. ${AGAIN}`,
   },
 } satisfies Record<string, ProblemKind>;

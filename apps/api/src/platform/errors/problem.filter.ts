@@ -1,6 +1,10 @@
 import { Catch, HttpException, type ArgumentsHost, type ExceptionFilter, Logger } from '@nestjs/common';
 import type { Response } from 'express';
+import { databaseTrouble } from '../database/sql-errors.js';
 import { Problem, problem } from './problem.js';
+
+/** Seconds after which asking again is worth while. */
+const AGAIN_S = '2';
 
 /** Answers every failure as a problem document; what is not a Problem is logged and told without its inside. */
 @Catch()
@@ -8,7 +12,7 @@ export class ProblemFilter implements ExceptionFilter {
   private readonly logger = new Logger('problems');
 
   catch(error: unknown, host: ArgumentsHost): void {
-    const found = asProblem(error);
+    const found = withRetry(asProblem(error));
     if (found.status >= 500) this.logger.error({ err: error }, 'failed');
     else if (found.status === 401 || found.status === 403 || found.status === 429) {
       this.logger.warn({ code: found.code }, 'refused');
@@ -27,12 +31,19 @@ export class ProblemFilter implements ExceptionFilter {
   }
 }
 
+/** Every 503 says when to come back. */
+const withRetry = (found: Problem): Problem =>
+  found.status === 503 ? found.withHeaders({ 'retry-after': AGAIN_S, ...found.headers }) : found;
+
 function asProblem(error: unknown): Problem {
   if (error instanceof Problem) return error;
+  const trouble = databaseTrouble(error);
+  if (trouble) return problem(trouble);
   const status = statusOf(error);
   if (status === 400) return problem('malformed');
   if (status === 404 || status === 405) return problem('not-found');
   if (status === 413) return problem('too-large');
+  if (status === 415) return problem('not-json');
   return problem('broken');
 }
 

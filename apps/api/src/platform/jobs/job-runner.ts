@@ -9,7 +9,7 @@ import { Environment } from '../../config/environment.js';
 import { JobTasks } from './job-tasks.js';
 
 const CONCURRENCY = 4;
-const AGAIN_MS = 5_000;
+const AGAIN_MS = 2_000;
 /** A job put in by another server is heard of at once; this is for those that come due later. */
 const POLL_MS = 1_000;
 
@@ -59,6 +59,9 @@ export class JobRunner implements OnApplicationBootstrap, BeforeApplicationShutd
       pollInterval: POLL_MS,
       noHandleSignals: true,
       parsedCronItems: [],
+      // In batches, of whatever is there: else a job whose end cannot be written, for the database went away just
+      // then, is a rejection that nobody handles, and ends the server.
+      preset: { worker: { completeJobBatchDelay: 0, failJobBatchDelay: 0 } },
       taskList: this.taskList(),
       logger: new QueueLogger(() => (level, message) => this.tell(level, message)),
     });

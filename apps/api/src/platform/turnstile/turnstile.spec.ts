@@ -1,4 +1,4 @@
-import { Turnstile } from './turnstile.js';
+import { NoPlace, Turnstile } from './turnstile.js';
 
 describe('the turnstile', () => {
   it('lets two through at once and keeps the order of the rest', async () => {
@@ -27,6 +27,17 @@ describe('the turnstile', () => {
   it('gives a place back when the work failed', async () => {
     const turnstile = new Turnstile(1);
     await expect(turnstile.pass(() => Promise.reject(new Error('spilt')))).rejects.toThrow('spilt');
+    await expect(turnstile.pass(() => Promise.resolve('dry'))).resolves.toBe('dry');
+  });
+
+  it('turns away whom the line has no room for, at once, and who waited too long', async () => {
+    const turnstile = new Turnstile(1, { length: 1, waitMs: 20 });
+    const leave = await turnstile.enter();
+    const waiting = turnstile.enter();
+    await expect(turnstile.enter()).rejects.toThrow('The line is full.');
+    await expect(waiting).rejects.toBeInstanceOf(NoPlace);
+    leave();
+    (await turnstile.enter())();
     await expect(turnstile.pass(() => Promise.resolve('dry'))).resolves.toBe('dry');
   });
 });
