@@ -1,4 +1,4 @@
-import { ValidationPipe, type INestApplication, type Type } from '@nestjs/common';
+import type { INestApplication, Type } from '@nestjs/common';
 import { NestFactory } from '@nestjs/core';
 import type { NestExpressApplication } from '@nestjs/platform-express';
 import cookieParser from 'cookie-parser';
@@ -9,10 +9,12 @@ import { refuseOpenRoutes } from './platform/auth/routes.js';
 import { Clock } from './platform/clock/clock.js';
 import { Database } from './platform/database/database.js';
 import { refuseUnsafeDatabase } from './platform/database/start-checks.js';
+import { RequestPipe } from './platform/dto/request-pipe.js';
 import { ProblemFilter } from './platform/errors/problem.filter.js';
-import { validationProblem } from './platform/errors/validation-problem.js';
 import { noStore, tellTime } from './platform/http/headers.js';
+import { jsonOnly } from './platform/http/json-only.js';
 import { securityHeaders } from './platform/http/security-headers.js';
+import { answerUnreadable } from './platform/http/unreadable.js';
 import { serveWeb } from './platform/http/web.js';
 import { serveApiDocuments } from './platform/http/open-api.js';
 
@@ -39,15 +41,10 @@ export async function createApp(
   app.set('trust proxy', environment.trustedProxy ?? false);
   app.setGlobalPrefix('api');
   app.use(tellTime(app.get(Clock)), securityHeaders(environment.publicOrigin), noStore, cookieParser());
+  app.use(jsonOnly);
   app.useBodyParser('json', { limit: BODY_LIMIT });
-  app.useGlobalPipes(
-    new ValidationPipe({
-      whitelist: true,
-      forbidNonWhitelisted: true,
-      transform: true,
-      exceptionFactory: validationProblem,
-    }),
-  );
+  answerUnreadable(app.getHttpServer());
+  app.useGlobalPipes(new RequestPipe());
   app.useGlobalFilters(new ProblemFilter());
   app.enableShutdownHooks();
   refuseOpenRoutes(app);

@@ -460,7 +460,7 @@ export interface components {
             ok: boolean;
         };
         SignInRequest: {
-            /** Format: email */
+            /** Format: idn-email */
             email: string;
             passphrase: string;
         };
@@ -777,6 +777,8 @@ export interface components {
             state: "waiting" | "leased" | "sent" | "failed" | "withdrawn";
             /** @description What the mail server said last. */
             lastAnswer: string | null;
+            /** @description Tries by which the mail may have arrived though no answer said so. */
+            unclearTries: number;
         };
         OrderView: {
             /** Format: uuid */

@@ -2,6 +2,7 @@ import { Injectable } from '@nestjs/common';
 import type { ActionKind } from '@wetside/db';
 import type { Me } from '../../platform/auth/me.js';
 import type { Tx } from '../../platform/database/database.js';
+import { isInstant } from '../../platform/dto/time-checks.js';
 import { invalid } from '../../platform/errors/problem.js';
 import { ActionViews } from '../../platform/ledger/action-views.js';
 import { LogRepository, type Place } from './log.repository.js';
@@ -60,9 +61,9 @@ const cursorOf = (place: Place): string =>
 /** @throws Problem 'invalid' for what no page has given out */
 function placeOf(cursor: string): Place {
   const [at = '', seq = ''] = Buffer.from(cursor, 'base64url').toString('utf8').split('|');
-  const happenedAt = new Date(at);
-  if (Number.isNaN(happenedAt.getTime()) || !/^\d{1,15}$/.test(seq)) {
+  // A Date would read years that PostgreSQL has no moment for.
+  if (!isInstant(at) || !/^\d{1,15}$/.test(seq)) {
     throw invalid([{ field: 'cursor', message: 'Start again from the newest.' }]);
   }
-  return { happenedAt, seq: Number(seq) };
+  return { happenedAt: new Date(at), seq: Number(seq) };
 }

@@ -30,7 +30,7 @@ export class LogAnswer {
 
 export class LogQuery {
   /** Where the page before ended. */
-  @Text({ max: 200, optional: true })
+  @Text({ max: 200, trim: false, optional: true })
   cursor?: string;
 
   @WholeNumber({ min: 1, max: 100, optional: true, query: true })

@@ -57,7 +57,10 @@ export class MixDraws {
     const from = shelfSource(content);
     const lotId = from.kind === 'lot' ? from.lotId : await this.lotOf(tx, darkroomId, from.openedPackIds);
     const makes = await this.chemistries.makesFromLot(tx, darkroomId, lotId, version.chemistryId);
-    if (!makes || makes.volumeUl === null) throw problem('does-not-make', version.document.name);
+    if (!makes || makes.volumeUl === null) {
+      const packIds = await this.stock.lockForMix(tx, darkroomId, { lotId });
+      throw packIds.length === 0 ? problem('not-found') : problem('does-not-make', version.document.name);
+    }
     const packMakes = { volumeUl: makes.volumeUl, wholeOnly: makes.wholeOnly };
     await this.stock.lockForMix(
       tx,

@@ -3,7 +3,7 @@ import { materials, type ChemistryDocument, type Material } from '@wetside/chemi
 import { containerKinds, containerMaterials } from '@wetside/db';
 import { Type } from 'class-transformer';
 import { IsObject, ValidateNested } from 'class-validator';
-import { Choice, Id, ListOfIds, Nested, Text, WholeNumber } from '../../platform/dto/fields.js';
+import { Choice, Id, ID_SCHEMA, ListOfIds, Nested, Text, WholeNumber } from '../../platform/dto/fields.js';
 import { ActionContentDto } from '../../platform/ledger/action-content.dto.js';
 import { ActionView } from '../../platform/ledger/action.view.js';
 import { EnvelopeDto } from '../../platform/ledger/envelope.dto.js';
@@ -24,12 +24,11 @@ export class ContainerDto {
   material?: (typeof containerMaterials)[number];
 }
 
-const ID_SCHEMA = { type: 'string', format: 'uuid' };
-
 const fromShape = (kind: string, fields: Record<string, object>) => ({
   type: 'object',
   required: ['kind', ...Object.keys(fields)],
   properties: { kind: { type: 'string', enum: [kind] }, ...fields },
+  additionalProperties: false,
 });
 
 /** What each kind of source needs beside its kind, for the OpenAPI document. */
@@ -44,15 +43,15 @@ export class MixFromDto {
   @Choice(['lot', 'opened', 'stock', 'hand'])
   kind: 'lot' | 'opened' | 'stock' | 'hand';
 
-  @Id({ optional: true })
+  @Id({ onlyWith: { field: 'kind', value: 'lot' } })
   lotId?: string;
 
   /** One opened pack for each part. */
-  @ListOfIds({ min: 1, max: 8, optional: true })
+  @ListOfIds({ min: 1, max: 8, onlyWith: { field: 'kind', value: 'opened' } })
   openedPackIds?: string[];
 
   /** The bottle of stock solution. */
-  @Id({ optional: true })
+  @Id({ onlyWith: { field: 'kind', value: 'stock' } })
   bottleId?: string;
 }
 

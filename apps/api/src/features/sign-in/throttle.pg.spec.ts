@@ -1,5 +1,8 @@
 import { rateCounters } from '@wetside/db';
+import { and, eq } from 'drizzle-orm';
 import request from 'supertest';
+import type { Tx } from '../../platform/database/database.js';
+import { Throttle } from '../../platform/auth/throttle.js';
 import { PASSPHRASE, TestApp, type TestPerson } from '../../testing/test-app.js';
 
 let t: TestApp;
@@ -70,4 +73,34 @@ describe('guessing', () => {
     const ina = await t.person('Ina Often');
     for (let i = 0; i < 35; i += 1) await tryOnce(ina.email, PASSPHRASE).expect(200);
   });
+});
+
+/** Throttle's own way to its counters. */
+interface Locking {
+  lock(tx: Tx, subject: string, key: string, now: Date): Promise<typeof rateCounters.$inferSelect>;
+}
+
+it('mutant: without the lock on a counter’s row a crowd counts as one try', async () => {
+  const jo = await t.person('Jo Crowd');
+  await fail(jo, 2);
+  let reading = 0;
+  let letGo = (): void => undefined;
+  const allRead = new Promise<void>((go) => (letGo = go));
+  const lock = jest
+    .spyOn(t.app.get<Throttle, Locking>(Throttle), 'lock')
+    .mockImplementation(async (tx, subject, key) => {
+      const where = and(eq(rateCounters.subject, subject), eq(rateCounters.key, key));
+      const [row] = await tx.select().from(rateCounters).where(where);
+      if (!row) throw new Error('There is no such counter.');
+      // Two counters a try, four tries: nobody writes before all have read.
+      reading += 1;
+      if (subject === 'sign-in:person') return row;
+      if (reading === 8) letGo();
+      await allRead;
+      return row;
+    });
+  const answers = await Promise.all([1, 2, 3, 4].map(() => tryOnce(jo.email)));
+  lock.mockRestore();
+  expect(answers.map(({ status }) => status)).toEqual([401, 401, 401, 401]);
+  await tryOnce(jo.email).expect(429);
 });

@@ -2,6 +2,7 @@ export {
   Choice,
   Flag,
   Id,
+  ID_SCHEMA,
   Instant,
   LocalDateField,
   MailAddress,

@@ -1,6 +1,8 @@
-import { Type } from 'class-transformer';
-import { ArrayMaxSize, ArrayMinSize, IsArray, IsIn, IsObject, IsUUID, ValidateNested } from 'class-validator';
+import { Transform, Type } from 'class-transformer';
+import { ArrayMaxSize, ArrayMinSize, IsArray, IsIn, IsObject, ValidateNested } from 'class-validator';
 import { field, presence, type FieldOptions } from './field-options.js';
+import { ID_SCHEMA } from './scalar-fields.js';
+import { ANY_UUID, HasShape } from './text-checks.js';
 
 type ClassOf = () => new () => object;
 
@@ -33,9 +35,12 @@ export function ListOf(classOf: ClassOf, { min = 0, max, ...options }: ListOptio
     { ...presence(options), type: () => classOf(), isArray: true, minItems: min, maxItems: max },
     Type(classOf),
     ...listChecks(min, max),
+    IsObject({ each: true, message: 'Each of these must be filled in.' }),
     ValidateNested({ each: true, message: 'Each of these must be filled in.' }),
   );
 }
+
+const inSmallLetters = (value: unknown): unknown => (typeof value === 'string' ? value.toLowerCase() : value);
 
 /** A list of ids. */
 export function ListOfIds({ min = 0, max, ...options }: ListOptions): PropertyDecorator {
@@ -44,12 +49,13 @@ export function ListOfIds({ min = 0, max, ...options }: ListOptions): PropertyDe
     {
       ...presence(options),
       type: 'array',
-      items: { type: 'string', format: 'uuid' },
+      items: ID_SCHEMA,
       minItems: min,
       maxItems: max,
     },
+    Transform(({ value }: { value: unknown }) => (Array.isArray(value) ? value.map(inSmallLetters) : value)),
     ...listChecks(min, max),
-    IsUUID('all', { each: true, message: 'Each of these must be an id.' }),
+    HasShape('isId', ANY_UUID, { each: true, message: 'Each of these must be an id.' }),
   );
 }
 

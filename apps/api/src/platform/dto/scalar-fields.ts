@@ -1,30 +1,31 @@
 import { Transform } from 'class-transformer';
-import {
-  IsBoolean,
-  IsEmail,
-  IsIn,
-  IsInt,
-  IsString,
-  IsUUID,
-  Length,
-  Matches,
-  Max,
-  Min,
-} from 'class-validator';
+import { IsBoolean, IsIn, IsInt, Max, Min } from 'class-validator';
 import { field, presence, type FieldOptions } from './field-options.js';
-import { IsInstant, IsLocalDate } from './time-checks.js';
+import { ANY_UUID, HasLength, HasShape, KEPT_TEXT, MAIL_ADDRESS, SEEN_TEXT } from './text-checks.js';
+import { INSTANT, IsInstant, IsLocalDate, LOCAL_DATE } from './time-checks.js';
+
+/** The document's word for: space around the text is cut off before it is looked at. */
+const TRIMMED = { 'x-trimmed': true };
+/** RFC 5321's limit of a path, without its brackets. */
+const MOST_OF_ADDRESS = 254;
+/** What `Id` takes, for documents that are written by hand. */
+export const ID_SCHEMA = { type: 'string' as const, format: 'uuid', pattern: ANY_UUID };
 
 interface TextOptions extends FieldOptions {
   min?: number;
   max: number;
   /** Space around it is cut off unless this says no (a passphrase). */
   trim?: false;
-  pattern?: { shape: RegExp; sentence: string };
 }
 
-/** Text of so many characters, 1 at the least unless said otherwise. */
-export function Text({ min = 1, max, trim, pattern, ...options }: TextOptions): PropertyDecorator {
+/**
+ * Text of so many characters (code points), 1 at the least unless said otherwise. What has to be there has to be seen,
+ * too: characters without a width alone do not do.
+ */
+export function Text({ min = 1, max, trim, ...options }: TextOptions): PropertyDecorator {
   const sentence = min > 0 ? `Write ${min} to ${max} characters.` : `Write at most ${max} characters.`;
+  const trims = trim !== false;
+  const pattern = trims && min > 0 ? SEEN_TEXT : KEPT_TEXT;
   return field(
     options,
     {
@@ -32,17 +33,19 @@ export function Text({ min = 1, max, trim, pattern, ...options }: TextOptions): 
       type: 'string',
       minLength: min,
       maxLength: max,
-      ...(pattern ? { pattern: pattern.shape.source } : {}),
+      pattern,
+      ...(trims ? TRIMMED : {}),
     },
-    ...(trim === false
-      ? []
-      : [Transform(({ value }: { value: unknown }) => (typeof value === 'string' ? value.trim() : value))]),
-    // One check more than Length needs, for Length alone passes over the sentence for what is not text.
-    IsString({ message: sentence }),
-    Length(min, max, { message: sentence }),
-    ...(pattern ? [Matches(pattern.shape, { message: pattern.sentence })] : []),
+    ...(trims ? [Transform(({ value }: { value: unknown }) => trimmed(value))] : []),
+    HasLength(min, max, { message: sentence }),
+    HasShape('isKeepable', KEPT_TEXT, {
+      message: 'There is a character in it that cannot be kept; type it anew.',
+    }),
+    ...(pattern === SEEN_TEXT ? [HasShape('isSeen', SEEN_TEXT, { message: sentence })] : []),
   );
 }
+
+const trimmed = (value: unknown): unknown => (typeof value === 'string' ? value.trim() : value);
 
 interface NumberOptions extends FieldOptions {
   min: number;
@@ -68,12 +71,13 @@ function numberFrom(value: unknown): unknown {
   return typeof value === 'string' && /^-?\d+$/.test(value) ? Number(value) : value;
 }
 
-/** A UUID of any version. */
+/** A UUID of any version, in small letters from here on. */
 export function Id(options: FieldOptions = {}): PropertyDecorator {
   return field(
     options,
-    { ...presence(options), type: 'string', format: 'uuid' },
-    IsUUID('all', { message: 'Give an id.' }),
+    { ...presence(options), ...ID_SCHEMA },
+    Transform(({ value }: { value: unknown }) => (typeof value === 'string' ? value.toLowerCase() : value)),
+    HasShape('isId', ANY_UUID, { message: 'Give an id.' }),
   );
 }
 
@@ -81,7 +85,7 @@ export function Id(options: FieldOptions = {}): PropertyDecorator {
 export function Instant(options: FieldOptions = {}): PropertyDecorator {
   return field(
     options,
-    { ...presence(options), type: 'string', format: 'date-time' },
+    { ...presence(options), type: 'string', format: 'date-time', pattern: INSTANT },
     IsInstant({ message: 'Give a moment with its time zone.' }),
   );
 }
@@ -90,7 +94,7 @@ export function Instant(options: FieldOptions = {}): PropertyDecorator {
 export function LocalDateField(options: FieldOptions = {}): PropertyDecorator {
   return field(
     options,
-    { ...presence(options), type: 'string', format: 'date' },
+    { ...presence(options), type: 'string', format: 'date', pattern: LOCAL_DATE },
     IsLocalDate({ message: 'Give a date that the calendar has.' }),
   );
 }
@@ -100,7 +104,7 @@ export function Choice(choices: readonly (string | number)[], options: FieldOpti
   const type = choices.every((choice) => typeof choice === 'number') ? 'integer' : 'string';
   return field(
     options,
-    { ...presence(options), type, enum: [...choices] },
+    { ...presence(options), type, enum: [...choices, ...(options.nullable ? [null] : [])] },
     IsIn([...choices], { message: `Choose one of ${choices.join(', ')}.` }),
   );
 }
@@ -127,12 +131,15 @@ export function Flag({ query, ...options }: FlagOptions = {}): PropertyDecorator
 
 /** A mail address, in lower case from here on. */
 export function MailAddress(options: FieldOptions = {}): PropertyDecorator {
+  const message = 'Write a mail address, such as name@example.org.';
+  const shape = { format: 'idn-email', maxLength: MOST_OF_ADDRESS, pattern: MAIL_ADDRESS };
   return field(
     options,
-    { ...presence(options), type: 'string', format: 'email', maxLength: 254 },
+    { ...presence(options), type: 'string', ...shape, ...TRIMMED },
     Transform(({ value }: { value: unknown }) =>
       typeof value === 'string' ? value.trim().toLowerCase() : value,
     ),
-    IsEmail({}, { message: 'Write a mail address, such as name@example.org.' }),
+    HasLength(0, MOST_OF_ADDRESS, { message }),
+    HasShape('isMailAddress', MAIL_ADDRESS, { message }),
   );
 }

@@ -19,6 +19,8 @@ export function withoutSecrets(url: string): string {
 export class LoggingModule {
   static with({ logLevel }: Environment): DynamicModule {
     return LoggerModule.forRoot({
+      // The line that closes a request says whose it was, too.
+      assignResponse: true,
       pinoHttp: {
         level: logLevel,
         redact: ['req.headers', 'res.headers', '*.passphrase', '*.token', '*.secret'],

@@ -1,5 +1,7 @@
 import type { INestApplication } from '@nestjs/common';
 import { DocumentBuilder, SwaggerModule, type OpenAPIObject } from '@nestjs/swagger';
+import { ID_SCHEMA } from '../dto/scalar-fields.js';
+import { KEPT_TEXT } from '../dto/text-checks.js';
 
 const PROBLEM = {
   type: 'object' as const,
@@ -38,7 +40,7 @@ export function buildOpenApi(app: INestApplication): OpenAPIObject {
     operationIdFactory: (controller, method) =>
       `${uncapital(controller.replace(/Controller$/, ''))}.${method}`,
   });
-  return withProblems(document);
+  return withIds(closed(withProblems(document)));
 }
 
 /** Every operation can fail, and always in the same shape. */
@@ -55,6 +57,42 @@ function withProblems(document: OpenAPIObject): OpenAPIObject {
     ...document.components,
     schemas: { ...document.components?.schemas, Problem: PROBLEM },
   };
+  return document;
+}
+
+/** A request with a field that is not known is refused, so its schemas say that there are no others. */
+function closed(document: OpenAPIObject): OpenAPIObject {
+  const schemas = document.components?.schemas ?? {};
+  const seen = new Set<string>();
+  const close = (part: unknown): void => {
+    for (const name of namesIn(part)) {
+      const schema = schemas[name];
+      if (seen.has(name) || !schema || '$ref' in schema) continue;
+      seen.add(name);
+      schema.additionalProperties = false;
+      close(schema);
+    }
+  };
+  for (const path of Object.values(document.paths)) {
+    for (const method of METHODS) close(path[method]?.requestBody);
+  }
+  return document;
+}
+
+const namesIn = (part: unknown): string[] =>
+  [...(JSON.stringify(part) ?? '').matchAll(/"#\/components\/schemas\/(\w+)"/g)].map(([, name = '']) => name);
+
+/** Path parameters that `IdParam` reads are named for an id; the darkroom's has a short name, too. */
+function withIds(document: OpenAPIObject): OpenAPIObject {
+  for (const path of Object.values(document.paths)) {
+    for (const method of METHODS) {
+      for (const parameter of path[method]?.parameters ?? []) {
+        if ('$ref' in parameter || parameter.in !== 'path') continue;
+        const isId = parameter.name.endsWith('Id') && parameter.name !== 'darkroomId';
+        parameter.schema = isId ? { ...ID_SCHEMA } : { type: 'string', pattern: KEPT_TEXT };
+      }
+    }
+  }
   return document;
 }
 
