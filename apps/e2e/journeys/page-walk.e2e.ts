@@ -5,8 +5,11 @@ import { bath, button, sheet } from '../support/steps.js';
 import { Complaints, isSound } from '../support/walk.js';
 import { desk, phone, World } from '../support/world.js';
 
-/** 80 letters without a space: the longest name that a form takes, and the hardest to wrap. */
-const long = (word: string): string => word.repeat(80).slice(0, 80);
+/**
+ * 200 letters without a space, the hardest to wrap: some written from right to left, some joined without a width, and
+ * signs of more than one unit.
+ */
+const long = (word: string): string => `${'מרים🎞️\u200b'.repeat(3)}${word.repeat(200)}`.slice(0, 200);
 const FIXER = 'Rapid fixer concentrate, 1 L';
 
 const place: Place = {
@@ -139,6 +142,59 @@ test.describe('every page, for every role, on a phone and on a desk', { tag: '@c
     await expect(sheet(page)).toContainText('Say why');
     await look(page);
     expect.soft(complaints.technician.take()).toEqual([]);
+  });
+
+  test('a name written from right to left does not turn the sentence around it', async () => {
+    const page = pages.member;
+    await world.asAdmin(async (sql) => {
+      await sql`update memberships set display_name = 'מרים' where role = 'member'`;
+    });
+    await arrive(page, 'log', /^Log$/);
+    const row = page.getByRole('listitem').filter({ hasText: 'מרים' }).first();
+    const lefts = await row.evaluate((element) => {
+      const texts = document.createTreeWalker(element, NodeFilter.SHOW_TEXT);
+      const found: number[] = [];
+      for (let node = texts.nextNode(); node; node = texts.nextNode()) {
+        const text = node.textContent ?? '';
+        const at = [text.indexOf('מ'), text.search(/ (put|put back|held|voided|reported) /)].filter(
+          (i) => i >= 0,
+        );
+        for (const from of at) {
+          const range = document.createRange();
+          range.setStart(node, from);
+          range.setEnd(node, from + 3);
+          found.push(range.getBoundingClientRect().left);
+        }
+      }
+      return found;
+    });
+    expect(lefts.length).toBeGreaterThanOrEqual(1);
+    expect([...lefts].sort((a, b) => a - b)).toEqual(lefts);
+  });
+
+  test('mutant: a script in the page, and a picture from elsewhere, are blocked and complained of', async () => {
+    const page = pages.member;
+    await arrive(page, 'sink', /^Sink$/);
+    complaints.member.take();
+    const ran = await page.evaluate(() => {
+      const script = document.createElement('script');
+      script.textContent = 'window.spilt = true';
+      document.body.append(script);
+      const picture = new Image();
+      picture.src = 'https://elsewhere.example/picture.png';
+      document.body.append(picture);
+      return 'spilt' in window;
+    });
+    expect(ran).toBe(false);
+    const heard: string[] = [];
+    await expect
+      .poll(() => {
+        heard.push(...complaints.member.take());
+        return heard.filter((text) => /Content Security Policy/.test(text)).length;
+      })
+      .toBeGreaterThanOrEqual(2);
+    expect(heard.join('\n')).toMatch(/script-src/);
+    expect(heard.join('\n')).toMatch(/img-src/);
   });
 
   test('signing in, and being told no', async ({ browser }) => {

@@ -8,6 +8,7 @@ import type { Darkroom } from '../../shared/api/types.js';
 import { DarkroomProvider, useMay } from '../../shared/darkroom/darkroom-context.js';
 import { darkroomQuery } from '../../shared/darkroom/darkroom.query.js';
 import { rememberDarkroom } from '../../shared/darkroom/last-darkroom.js';
+import { paths } from '../../shared/routes/paths.js';
 import { Fetched } from '../../shared/ui/fetched.js';
 import { Waiting } from '../../shared/ui/waiting.js';
 import { PhoneTabs } from './phone-tabs.js';
@@ -25,7 +26,7 @@ const SkipLink = chakra('a', {
   },
 });
 
-function Framed() {
+function Framed({ address }: { address: string }) {
   const { pathname } = useLocation();
   const needsYou = useNeedsYou(useMay('technician')).data?.open.length;
   useEffect(() => {
@@ -44,7 +45,7 @@ function Framed() {
           pb={{ base: '20', lg: '8' }}
           maxW="76rem"
         >
-          <ActionStrip />
+          <ActionStrip over={pathname === paths.sink(address)} />
           <Suspense fallback={<Waiting what="the page" />}>
             <Outlet />
           </Suspense>
@@ -60,7 +61,7 @@ function InDarkroom({ darkroom, address }: { darkroom: Darkroom; address: string
   useEffect(() => rememberDarkroom(darkroom.shortName), [darkroom.shortName]);
   return (
     <DarkroomProvider value={current}>
-      <Framed key={address} />
+      <Framed key={address} address={address} />
     </DarkroomProvider>
   );
 }

@@ -96,3 +96,13 @@ export function fieldOfMix(field: string, code: string): keyof MixForm | null {
   if (field.startsWith('from')) return 'from';
   return byField[field] ?? byCode[code] ?? null;
 }
+
+/** The field, if it stands on the page: the time of a mix made now and the one material of a chemistry are not asked. */
+export function shownField(
+  field: keyof MixForm | null,
+  { when }: MixForm,
+  { document }: ChemistryView,
+): keyof MixForm | null {
+  if (field === 'mixedAt' && when === 'now') return null;
+  return field === 'material' && document.materials.length < 2 ? null : field;
+}

@@ -10,11 +10,12 @@ export interface ReceiptRow {
   lotNumber: string;
   expiresOn: string;
   count: string;
+  /** Said where more came than was ordered: the count is right. */
+  moreIsRight: boolean;
 }
 export interface ReceiptForm {
   rows: ReceiptRow[];
   note: string;
-  overDeliveryOk: boolean;
 }
 
 export const emptyRow = (packId: string, packName = ''): ReceiptRow => ({
@@ -25,6 +26,7 @@ export const emptyRow = (packId: string, packName = ''): ReceiptRow => ({
   lotNumber: '',
   expiresOn: '',
   count: '1',
+  moreIsRight: false,
 });
 
 /** A row that says nothing came is left out. */
@@ -39,6 +41,14 @@ export function receiptLines(rows: readonly ReceiptRow[]): ReceiptLine[] {
     expiresOn: row.expiresOn === '' ? null : row.expiresOn,
     count: Number(row.count),
   }));
+}
+
+/** The rows that the server said are more than was ordered. */
+export function rowsOverOrder(fields: readonly string[], rows: readonly ReceiptRow[]): number[] {
+  return fields.flatMap((field) => {
+    const [, row] = /^rows\.(\d+)\.count$/.exec(fieldOfReceipt(field, rows) ?? '') ?? [];
+    return row === undefined ? [] : [Number(row)];
+  });
 }
 
 const columns = ['packId', 'lotNumber', 'expiresOn', 'count'] as const;

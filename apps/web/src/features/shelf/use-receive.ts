@@ -7,13 +7,13 @@ import type { ReceiptAnswer } from '../../shared/api/types.js';
 import { countOf } from '../../shared/formats/amounts.js';
 import { showProblem } from '../../shared/ui/form-problem.js';
 import { usePutReceipt } from './api/put-receipt.js';
-import { fieldOfReceipt, type ReceiptForm, receiptLines } from './receipt-form.js';
+import { fieldOfReceipt, type ReceiptForm, receiptLines, rowsOverOrder } from './receipt-form.js';
 
-/** Sends what came, once, and puts the server's objections into the form. */
+/** Sends what came, once, and puts the server's objections into the form. `over`: the rows to ask about. */
 export function useReceive(form: UseFormReturn<ReceiptForm>, orderId: string | null) {
   const receipt = usePutReceipt();
   const [actionId, setActionId] = useState(newId);
-  const [moreThanOrdered, setMoreThanOrdered] = useState(false);
+  const [over, setOver] = useState<readonly number[]>([]);
 
   const receive = async (filled: ReceiptForm): Promise<ReceiptAnswer | null> => {
     const lines = receiptLines(filled.rows);
@@ -25,7 +25,7 @@ export function useReceive(form: UseFormReturn<ReceiptForm>, orderId: string | n
       ...(orderId && { orderId }),
       lines,
       ...(filled.note.trim() && { note: filled.note.trim() }),
-      ...(filled.overDeliveryOk && { overDeliveryOk: true }),
+      ...(over.length > 0 && over.every((row) => filled.rows[row]?.moreIsRight) && { overDeliveryOk: true }),
     };
     try {
       const answer = await receipt.sendAndWait(actionId, content);
@@ -38,12 +38,16 @@ export function useReceive(form: UseFormReturn<ReceiptForm>, orderId: string | n
         canUndo: true,
       });
       setActionId(newId());
+      setOver([]);
       return answer;
     } catch (error) {
-      if (error instanceof ProblemError && error.code === 'more-than-ordered') setMoreThanOrdered(true);
+      if (error instanceof ProblemError && error.code === 'more-than-ordered') {
+        const fields = error.fields.map(({ field }) => field.replace(/^content\./, ''));
+        setOver(rowsOverOrder(fields, filled.rows));
+      }
       showProblem(error, form.setError, (field) => fieldOfReceipt(field, filled.rows));
       return null;
     }
   };
-  return { receive, moreThanOrdered, isPending: receipt.isPending };
+  return { receive, over, isPending: receipt.isPending };
 }

@@ -17,13 +17,20 @@ const useOnline = (): boolean =>
     () => onlineManager.isOnline(),
   );
 
-/** What was just done, said once to a screen reader, and the way back. */
-export function ActionStrip() {
+/**
+ * What was just done, said once to a screen reader, and the way back. Where the page is worked on with wet hands it lies
+ * over the heading and stays in sight, so that nothing moves under a finger when it comes and goes.
+ */
+export function ActionStrip({ over = false }: { over?: boolean }) {
   const strip = useStore(stripStore);
   const undo = useUndo();
   const online = useOnline();
   return (
-    <Box role="status" aria-label="What was just done">
+    <Box
+      role="status"
+      aria-label="What was just done"
+      {...(over && { position: 'sticky', top: '0', h: '0', mx: '-4', zIndex: 'docked' })}
+    >
       {strip && (
         <Flex
           align="center"
@@ -32,6 +39,8 @@ export function ActionStrip() {
           px="4"
           py="2"
           mb="4"
+          // Over a heading it hides the whole of it: half a sentence is worse than none.
+          minH={over ? '5.5rem' : undefined}
           bg="surface"
           borderBottomWidth="1px"
           borderColor="rule"

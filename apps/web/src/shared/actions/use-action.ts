@@ -1,4 +1,4 @@
-import { type QueryClient, useMutation, useQueryClient } from '@tanstack/react-query';
+import { onlineManager, type QueryClient, useMutation, useQueryClient } from '@tanstack/react-query';
 import { useRef } from 'react';
 import { isPassing, isUncertain, wordsOf } from '../api/problem.js';
 import { keptKey, type Kept } from '../api/query-keys.js';
@@ -6,6 +6,7 @@ import type { ActionAnswer } from '../api/types.js';
 import { useDarkroom } from '../darkroom/darkroom-context.js';
 import { addPending, type BottleChange, type PendingAction, removePending } from './pending.store.js';
 import { type PutAction, sendAction, tell, type Told } from './send-action.js';
+import { orNoSignal } from './or-no-signal.js';
 import { showStrip, updateStrip } from './strip.store.js';
 import { rememberBefore } from './undo-memory.js';
 
@@ -84,6 +85,8 @@ export function useAction<Content extends object, Answer extends ActionAnswer>(
       }
       removePending(actionId);
       updateStrip(actionId, { state: 'refused', words: wordsOf(error), canUndo: false });
+      // What was shown led to a thing that cannot be done: it is not how things are any more.
+      for (const kept of recipe.touches) void client.invalidateQueries({ queryKey: keptKey(darkroom, kept) });
     },
   });
 
@@ -96,13 +99,40 @@ export function useAction<Content extends object, Answer extends ActionAnswer>(
     last.current = same ? before : { told: tell(actionId, content), content, options };
     return last.current;
   };
+  const send = (actionId: string, content: Content, options: SendOptions): void =>
+    mutation.mutate(prepare(actionId, content, options));
+  const sendAndWait = (actionId: string, content: Content): Promise<Answer> =>
+    orNoSignal(() => mutation.mutateAsync(prepare(actionId, content, {})));
+  /**
+   * Sends it from a sheet that stays open until the answer is there, so that a refusal finds what was typed. While
+   * nobody knows what became of it the sheet may close: the strip keeps it, and sends the very same again.
+   */
+  const sendFromSheet = async (
+    actionId: string,
+    content: Content,
+    options: SendOptions & { words: string },
+  ): Promise<void> => {
+    const { words, undone, canUndo = true } = options;
+    if (!onlineManager.isOnline()) {
+      send(actionId, content, options);
+      return;
+    }
+    try {
+      const { action } = await sendAndWait(actionId, content);
+      showStrip({ actionId, state: 'done', words, undone, canUndo: canUndo && action.canUndo });
+    } catch (error) {
+      if (!isUncertain(error)) throw error;
+      const again = (): void => mutation.mutate({ ...prepare(actionId, content, {}), options });
+      showStrip({ actionId, state: 'unsent', words, undone, canUndo, why: wordsOf(error), again });
+    }
+  };
   return {
     /** Sends it and lets the strip speak. */
-    send: (actionId: string, content: Content, options: SendOptions): void =>
-      mutation.mutate(prepare(actionId, content, options)),
+    send,
     /** Sends it for a form that waits for the answer. Rejects with ProblemError or NetworkError. */
-    sendAndWait: (actionId: string, content: Content): Promise<Answer> =>
-      mutation.mutateAsync(prepare(actionId, content, {})),
+    sendAndWait,
+    /** Rejects with the ProblemError of a refusal, and with nothing else. */
+    sendFromSheet,
     isPending: mutation.isPending,
   };
 }

@@ -1,5 +1,6 @@
 import { createApiClient } from '@wetside/api-client';
 import { learnFromAnswer } from '../clock/web-clock.js';
+import { isolateNames } from './isolate-names.js';
 import { NetworkError, problemOf } from './problem.js';
 import type { Refined } from './refined.js';
 
@@ -49,5 +50,5 @@ export async function answered<T>(sent: Promise<Answer<T>>): Promise<Refined<T>>
     throw new NetworkError('no answer', { cause });
   });
   if (!response.ok) throw problemOf(response.status, error);
-  return data as Refined<T>;
+  return isolateNames(data) as Refined<T>;
 }

@@ -19,10 +19,10 @@ export function showMoney(minor: number | null, currency: string): string {
   return `${currency} ${(minor / 10 ** digits).toFixed(digits)}`;
 }
 
-/** Millilitres, typed as a whole number, to microlitres; null when it is none. */
+/** Millilitres, typed as a whole number in plain digits, to microlitres; null when it is none. */
 export function ulFromMl(text: string): number | null {
-  const ml = Number(text.trim());
-  return text.trim() !== '' && Number.isInteger(ml) && ml > 0 ? ml * 1_000 : null;
+  const ml = /^\d{1,9}$/.test(text.trim()) ? Number(text) : 0;
+  return ml > 0 ? ml * 1_000 : null;
 }
 
 /** 'FX-01, SB-02 and WT-03'. */

@@ -3,7 +3,8 @@ import { ProblemError, wordsOf } from '../api/problem.js';
 
 /**
  * Puts an answer that says no into the form: a field's own sentence at the field, the first of them focused,
- * everything else above the button. `fieldFor` turns the server's field names into the form's.
+ * everything else above the button. `fieldFor` turns the server's field names into those of the form's fields that
+ * stand on the page; null for one that does not.
  */
 export function showProblem<Form extends FieldValues>(
   error: unknown,
@@ -12,14 +13,20 @@ export function showProblem<Form extends FieldValues>(
 ): void {
   const fields = error instanceof ProblemError ? error.fields : [];
   const code = error instanceof ProblemError ? error.code : '';
+  const homeless: string[] = [];
   let placed = 0;
   for (const { field, message } of fields) {
     const name = fieldFor(field.replace(/^content\./, ''), code);
-    if (!name) continue;
-    setError(name, { type: 'server', message }, { shouldFocus: placed === 0 });
-    placed += 1;
+    if (!name) homeless.push(message);
+    else {
+      setError(name, { type: 'server', message }, { shouldFocus: placed === 0 });
+      placed += 1;
+    }
   }
-  const whole = placed === 0 ? fieldFor('', code) : null;
+  if (homeless.length > 0)
+    setError('root', { type: 'server', message: [wordsOf(error), ...homeless].join(' ') });
+  if (fields.length > 0) return;
+  const whole = fieldFor('', code);
   if (whole) setError(whole, { type: 'server', message: wordsOf(error) }, { shouldFocus: true });
-  else if (placed === 0) setError('root', { type: 'server', message: wordsOf(error) });
+  else setError('root', { type: 'server', message: wordsOf(error) });
 }

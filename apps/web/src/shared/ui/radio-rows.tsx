@@ -16,7 +16,12 @@ const Row = chakra('label', {
 export function RadioRows({ legend, options, error, ...field }: Props) {
   const errorId = useId();
   return (
-    <chakra.fieldset minW="0" aria-describedby={error ? errorId : undefined}>
+    <chakra.fieldset
+      minW="0"
+      role="radiogroup"
+      aria-invalid={error !== undefined}
+      aria-describedby={error ? errorId : undefined}
+    >
       <chakra.legend fontWeight="600">{legend}</chakra.legend>
       <Stack gap="0">
         {options.map((option) => (

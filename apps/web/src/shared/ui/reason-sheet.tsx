@@ -2,8 +2,10 @@ import { Button, Flex, Stack } from '@chakra-ui/react';
 import { useState } from 'react';
 import { useForm } from 'react-hook-form';
 import { newId } from '../actions/send-action.js';
+import { FormError } from './form-error.js';
+import { showProblem } from './form-problem.js';
 import { Sheet } from './sheet.js';
-import { TextAreaField } from './text-field.js';
+import { reasonRules, TextAreaField } from './text-field.js';
 
 interface Props {
   open: boolean;
@@ -14,15 +16,22 @@ interface Props {
   missing: string;
   suggestions: readonly string[];
   button: string;
-  onConfirm: (actionId: string, reason: string) => void;
+  /** Rejects when the server says no: the sheet then stays open with what was typed. */
+  onConfirm: (actionId: string, reason: string) => Promise<void>;
 }
 
 function ReasonForm({ label, missing, suggestions, button, onConfirm, onClose }: Props) {
   const [actionId] = useState(newId);
-  const { register, handleSubmit, setValue, formState } = useForm({ defaultValues: { reason: '' } });
-  const confirm = handleSubmit(({ reason }) => {
-    onConfirm(actionId, reason.trim());
-    onClose();
+  const { register, handleSubmit, setValue, setError, formState } = useForm({
+    defaultValues: { reason: '' },
+  });
+  const confirm = handleSubmit(async ({ reason }) => {
+    try {
+      await onConfirm(actionId, reason.trim());
+      onClose();
+    } catch (error) {
+      showProblem(error, setError, (field) => (field === 'reason' ? 'reason' : null));
+    }
   });
   return (
     <form onSubmit={(event) => void confirm(event)} noValidate>
@@ -44,9 +53,16 @@ function ReasonForm({ label, missing, suggestions, button, onConfirm, onClose }:
         <TextAreaField
           label={label}
           error={formState.errors.reason?.message}
-          {...register('reason', { validate: (text) => text.trim() !== '' || missing })}
+          {...register('reason', reasonRules(missing))}
         />
-        <Button type="submit" minH="13" whiteSpace="normal">
+        <FormError message={formState.errors.root?.message} />
+        <Button
+          type="submit"
+          minH="13"
+          whiteSpace="normal"
+          loading={formState.isSubmitting}
+          loadingText="Recording"
+        >
           {button}
         </Button>
       </Stack>

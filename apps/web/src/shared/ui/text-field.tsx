@@ -33,7 +33,14 @@ export function TextField({ label, error, help, unit, ...input }: TextFieldProps
   return (
     <FormField label={label} error={error} help={help}>
       <Flex align="center" w="100%" position="relative">
-        <Input minH="11" bg="surface" borderColor="field" pr={unit ? '16' : undefined} {...input} />
+        <Input
+          minH="11"
+          bg="surface"
+          borderColor="field"
+          dir="auto"
+          pr={unit ? '16' : undefined}
+          {...input}
+        />
         {unit && (
           <Box as="span" position="absolute" right="3" color="ink.muted" aria-hidden="true">
             {unit}
@@ -44,12 +51,24 @@ export function TextField({ label, error, help, unit, ...input }: TextFieldProps
   );
 }
 
+/** The most that the server takes of a reason, in characters. */
+const REASON_MOST = 300;
+
+/** A reason is asked for, and has an end. */
+export const reasonRules = (missing: string, most = REASON_MOST) => ({
+  validate: (text: string): true | string => {
+    const length = text.trim().length;
+    if (length === 0) return missing;
+    return length <= most || `${most} characters at the most; this is ${length}.`;
+  },
+});
+
 type TextAreaFieldProps = Omit<FieldProps, 'children'> & ComponentProps<typeof Textarea>;
 
 export function TextAreaField({ label, error, help, ...area }: TextAreaFieldProps) {
   return (
     <FormField label={label} error={error} help={help}>
-      <Textarea bg="surface" borderColor="field" rows={2} {...area} />
+      <Textarea bg="surface" borderColor="field" rows={2} dir="auto" {...area} />
     </FormField>
   );
 }

@@ -4,8 +4,10 @@ import { useForm } from 'react-hook-form';
 import { newId } from '../../../shared/actions/send-action.js';
 import { useVoid } from '../../../shared/actions/use-void.js';
 import type { NeedsYouRow } from '../../../shared/api/types.js';
+import { FormError } from '../../../shared/ui/form-error.js';
+import { showProblem } from '../../../shared/ui/form-problem.js';
 import { Sheet } from '../../../shared/ui/sheet.js';
-import { TextAreaField } from '../../../shared/ui/text-field.js';
+import { reasonRules, TextAreaField } from '../../../shared/ui/text-field.js';
 import { usePutDecision } from '../api/put-decision.js';
 
 interface Props {
@@ -18,17 +20,31 @@ function DecideForm({ load, onClose }: Props) {
   const [ids] = useState(() => ({ accept: newId(), voided: newId() }));
   const decision = usePutDecision();
   const voiding = useVoid();
-  const { register, handleSubmit, formState } = useForm({ defaultValues: { reason: '' } });
-  const accept = handleSubmit(({ reason }) => {
-    const content = { loadActionId: load.actionId, decision: 'accept' as const, reason: reason.trim() };
-    decision.send(ids.accept, content, { words: `The load of ${load.by} stands.` });
-    onClose();
-  });
-  const voidIt = handleSubmit(({ reason }) => {
-    const content = { voidedActionId: load.actionId, reason: reason.trim() };
-    voiding.send(ids.voided, content, { words: `The load of ${load.by} is voided.`, canUndo: false });
-    onClose();
-  });
+  const { register, handleSubmit, setError, formState } = useForm({ defaultValues: { reason: '' } });
+  const { errors, isSubmitting } = formState;
+  const decide = (send: (reason: string) => Promise<void>) =>
+    handleSubmit(async ({ reason }) => {
+      try {
+        await send(reason.trim());
+        onClose();
+      } catch (error) {
+        showProblem(error, setError, (field) => (field === 'reason' ? 'reason' : null));
+      }
+    });
+  const accept = decide((reason) =>
+    decision.sendFromSheet(
+      ids.accept,
+      { loadActionId: load.actionId, decision: 'accept', reason },
+      { words: `The load of ${load.by} stands.` },
+    ),
+  );
+  const voidIt = decide((reason) =>
+    voiding.sendFromSheet(
+      ids.voided,
+      { voidedActionId: load.actionId, reason },
+      { words: `The load of ${load.by} is voided.`, canUndo: false },
+    ),
+  );
   return (
     <form onSubmit={(event) => void accept(event)} noValidate>
       <Stack gap="4">
@@ -38,15 +54,14 @@ function DecideForm({ load, onClose }: Props) {
         </p>
         <TextAreaField
           label="Why"
-          error={formState.errors.reason?.message}
-          {...register('reason', {
-            validate: (text) => text.trim() !== '' || 'Say why: it stays in the log.',
-          })}
+          error={errors.reason?.message}
+          {...register('reason', reasonRules('Say why: it stays in the log.'))}
         />
-        <Button type="submit" minH="13">
+        <FormError message={errors.root?.message} />
+        <Button type="submit" minH="13" loading={isSubmitting} loadingText="Recording">
           Accept the load
         </Button>
-        <Button variant="outline" minH="13" onClick={() => void voidIt()}>
+        <Button variant="outline" minH="13" disabled={isSubmitting} onClick={() => void voidIt()}>
           Void the load
         </Button>
       </Stack>

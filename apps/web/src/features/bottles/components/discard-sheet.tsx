@@ -4,6 +4,8 @@ import { useState } from 'react';
 import { useForm } from 'react-hook-form';
 import { newId } from '../../../shared/actions/send-action.js';
 import type { BottleView } from '../../../shared/api/types.js';
+import { FormError } from '../../../shared/ui/form-error.js';
+import { showProblem } from '../../../shared/ui/form-problem.js';
 import { Sheet } from '../../../shared/ui/sheet.js';
 import { SelectField, TextField } from '../../../shared/ui/text-field.js';
 import { usePutDiscard } from '../api/put-discard.js';
@@ -29,13 +31,18 @@ const options = wasteRoutes.map((value) => ({ value, label: routeWords[value] })
 function DiscardForm({ bottle, document, onClose }: Props) {
   const [actionId] = useState(newId);
   const discard = usePutDiscard();
-  const { register, handleSubmit } = useForm({
+  const { register, handleSubmit, setError, formState } = useForm({
     defaultValues: { wasteRoute: document.waste.route, note: '' },
   });
-  const confirm = handleSubmit(({ wasteRoute, note }) => {
+  const { errors, isSubmitting } = formState;
+  const confirm = handleSubmit(async ({ wasteRoute, note }) => {
     const content = { bottleId: bottle.id, wasteRoute, ...(note.trim() && { note: note.trim() }) };
-    discard.send(actionId, content, { words: `${bottle.code} is discarded.` });
-    onClose();
+    try {
+      await discard.sendFromSheet(actionId, content, { words: `${bottle.code} is discarded.` });
+      onClose();
+    } catch (error) {
+      showProblem(error, setError, (field) => (field === 'note' || field === 'wasteRoute' ? field : null));
+    }
   });
   return (
     <form onSubmit={(event) => void confirm(event)} noValidate>
@@ -44,6 +51,7 @@ function DiscardForm({ bottle, document, onClose }: Props) {
           label="Waste apart"
           options={options}
           help={document.waste.note}
+          error={errors.wasteRoute?.message}
           {...register('wasteRoute')}
         />
         <Box as="ul" ps="5" listStyleType="disc" aria-label="Mind">
@@ -51,8 +59,9 @@ function DiscardForm({ bottle, document, onClose }: Props) {
             <li key={words}>{words}</li>
           ))}
         </Box>
-        <TextField label="Note" {...register('note')} />
-        <Button type="submit" minH="13" whiteSpace="normal">
+        <TextField label="Note" error={errors.note?.message} {...register('note')} />
+        <FormError message={errors.root?.message} />
+        <Button type="submit" minH="13" whiteSpace="normal" loading={isSubmitting} loadingText="Recording">
           Discard {bottle.code}
         </Button>
       </Stack>

@@ -24,7 +24,7 @@ export function HoldSheet({
       suggestions={suggestions}
       button={`Put ${bottle.code} on hold`}
       onConfirm={(actionId, reason) =>
-        hold.send(
+        hold.sendFromSheet(
           actionId,
           { bottleId: bottle.id, reason },
           { words: `${bottle.code} is on hold.`, undone: `${bottle.code} is not on hold.` },

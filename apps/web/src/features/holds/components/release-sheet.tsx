@@ -22,7 +22,11 @@ export function ReleaseSheet({
       suggestions={[]}
       button={`Release ${bottle.code}`}
       onConfirm={(actionId, reason) =>
-        release.send(actionId, { bottleId: bottle.id, reason }, { words: `${bottle.code} is released.` })
+        release.sendFromSheet(
+          actionId,
+          { bottleId: bottle.id, reason },
+          { words: `${bottle.code} is released.` },
+        )
       }
     />
   );

@@ -1,5 +1,6 @@
 import { Flex } from '@chakra-ui/react';
 import { type FilmClass, filmClasses } from '@wetside/chemistry';
+import { useState } from 'react';
 import type { FilmLine, FormatName } from '../../../shared/api/types.js';
 import { classWords, formatWords } from '../../../shared/formats/film-words.js';
 import { ChoiceChips } from '../../../shared/ui/choice-chips.js';
@@ -22,13 +23,38 @@ interface Props {
   onChange: (film: FilmLine) => void;
 }
 
+/** The most that the server takes of a side. */
+const MOST_MM = 2_000;
+
+interface SideProps {
+  label: string;
+  mm: number | undefined;
+  onChange: (mm: number | undefined) => void;
+}
+
+/** One side of a sheet, as typed. Whole millimetres are recorded, a part of one as one: film is never counted short. */
+function Side({ label, mm, onChange }: SideProps) {
+  const [typed, setTyped] = useState(mm === undefined ? '' : String(mm));
+  const wrong = typed.trim() !== '' && mm === undefined;
+  const type = (text: string): void => {
+    setTyped(text);
+    const size = /^\d{1,4}([.,]\d{1,3})?$/.test(text.trim()) ? Math.ceil(Number(text.replace(',', '.'))) : 0;
+    onChange(size >= 1 && size <= MOST_MM ? size : undefined);
+  };
+  return (
+    <TextField
+      label={label}
+      unit="mm"
+      inputMode="decimal"
+      error={wrong ? `A number of mm, 1 to ${MOST_MM}.` : undefined}
+      value={typed}
+      onChange={(event) => type(event.target.value)}
+    />
+  );
+}
+
 /** What film it is: its format and its class. */
 export function FilmChoice({ film, onChange }: Props) {
-  const size = (key: 'widthMm' | 'heightMm', text: string): void => {
-    // Whole millimetres are recorded, and a part of one counts as one: film is never counted short.
-    const mm = Math.ceil(Number(text));
-    onChange({ ...film, [key]: mm > 0 ? mm : undefined });
-  };
   return (
     <>
       <ChoiceChips
@@ -40,20 +66,8 @@ export function FilmChoice({ film, onChange }: Props) {
       />
       {film.format === 'sheet' && (
         <Flex gap="3">
-          <TextField
-            label="Width"
-            unit="mm"
-            inputMode="decimal"
-            defaultValue={film.widthMm}
-            onChange={(event) => size('widthMm', event.target.value)}
-          />
-          <TextField
-            label="Height"
-            unit="mm"
-            inputMode="decimal"
-            defaultValue={film.heightMm}
-            onChange={(event) => size('heightMm', event.target.value)}
-          />
+          <Side label="Width" mm={film.widthMm} onChange={(widthMm) => onChange({ ...film, widthMm })} />
+          <Side label="Height" mm={film.heightMm} onChange={(heightMm) => onChange({ ...film, heightMm })} />
         </Flex>
       )}
       <ChoiceChips

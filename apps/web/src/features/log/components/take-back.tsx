@@ -17,15 +17,16 @@ export function TakeBack({ entry: { action, sentence } }: { entry: LogEntry }) {
   const [asking, setAsking] = useState(false);
   const isOwn = action.by.membershipId === me.membershipId;
   const isFresh = Date.parse(reckonedNow()) - Date.parse(action.recordedAt) < UNDO_MS;
-  const send = (actionId: string, reason?: string): void =>
-    voiding.send(
-      actionId,
-      { voidedActionId: action.id, ...(reason && { reason }) },
-      { words: `Undone: ${sentence}.`, canUndo: false },
-    );
+  const content = { voidedActionId: action.id };
+  const said = { words: `Undone: ${sentence}.`, canUndo: false };
   if (isOwn && isFresh) {
     return (
-      <Button variant="outline" minH="11" aria-label={`Undo: ${sentence}`} onClick={() => send(newId())}>
+      <Button
+        variant="outline"
+        minH="11"
+        aria-label={`Undo: ${sentence}`}
+        onClick={() => voiding.send(newId(), content, said)}
+      >
         Undo
       </Button>
     );
@@ -52,7 +53,7 @@ export function TakeBack({ entry: { action, sentence } }: { entry: LogEntry }) {
           missing="Say why: it stays in the log."
           suggestions={[]}
           button="Void it"
-          onConfirm={send}
+          onConfirm={(actionId, reason) => voiding.sendFromSheet(actionId, { ...content, reason }, said)}
         />
       )}
     </>

@@ -15,7 +15,7 @@ import { FormError } from '../../../shared/ui/form-error.js';
 import { showProblem } from '../../../shared/ui/form-problem.js';
 import { SectionHeading } from '../../../shared/ui/page-heading.js';
 import { usePutMix } from '../api/put-mix.js';
-import { checkVolume, fieldOfMix, materialOf, mixContent, type MixForm } from '../mix-form.js';
+import { checkVolume, fieldOfMix, materialOf, mixContent, type MixForm, shownField } from '../mix-form.js';
 import { type MixSource, mixSources } from '../mix-sources.js';
 import { MixFields } from './mix-fields.js';
 import { MixPreview } from './mix-preview.js';
@@ -65,7 +65,8 @@ export function NewMix({ chemistries, first, packs }: Props) {
   const earlier = values.when === 'earlier' ? fromWallClock(values.mixedAt, darkroom.zone) : null;
   const chooseChemistry = (id: string): void => {
     const chosen = chemistries.find((one) => one.id === id) ?? first;
-    reset(startOf(chosen, mixSources(chosen, packs, date)[0]));
+    const { when, mixedAt, note } = getValues();
+    reset({ ...startOf(chosen, mixSources(chosen, packs, date)[0]), when, mixedAt, note });
   };
   const record = handleSubmit(async (filled) => {
     const content = mixContent(filled, ids.bottleId, chemistry, source);
@@ -81,7 +82,7 @@ export function NewMix({ chemistries, first, packs }: Props) {
         canUndo: true,
       });
     } catch (error) {
-      showProblem(error, setError, fieldOfMix);
+      showProblem(error, setError, (field, code) => shownField(fieldOfMix(field, code), filled, chemistry));
     }
   });
   const volumeUl = ulFromMl(values.volumeMl);

@@ -10,6 +10,8 @@ export function usePatchOrder(orderId: string) {
   const client = useQueryClient();
   const { address } = useDarkroom();
   return useMutation({
+    // Without a signal it fails at once, and the form says so.
+    networkMode: 'always',
     mutationFn: (change: ChangeOrder) =>
       answered(
         api.PATCH('/darkrooms/{darkroomId}/orders/{orderId}', {

@@ -22,7 +22,7 @@ export function CancelSheet({ order, open, onClose }: Props) {
       suggestions={[]}
       button={sent ? `Cancel the rest and tell ${order.supplier.name}` : 'Cancel the draft'}
       onConfirm={(actionId, reason) =>
-        cancel.send(
+        cancel.sendFromSheet(
           actionId,
           { orderId: order.id, reason },
           { words: `Order ${order.numberText} is cancelled.`, canUndo: false },

@@ -1,4 +1,5 @@
-import { Box, Button, chakra, Stack } from '@chakra-ui/react';
+import { Box, Button, Stack } from '@chakra-ui/react';
+import { useEffect, useRef } from 'react';
 import { useForm } from 'react-hook-form';
 import type { OrderView } from '../../../shared/api/types.js';
 import { FormError } from '../../../shared/ui/form-error.js';
@@ -18,14 +19,22 @@ const rowsOf = (order: OrderView): ReceiptRow[] =>
 
 /** Receive a delivery, in part or whole. */
 export function OrderReceive({ order }: { order: OrderView }) {
-  const form = useForm<ReceiptForm>({
-    defaultValues: { rows: rowsOf(order), note: '', overDeliveryOk: false },
-  });
-  const { receive, moreThanOrdered } = useReceive(form, order.id);
+  const form = useForm<ReceiptForm>({ defaultValues: { rows: rowsOf(order), note: '' } });
+  const { receive, over } = useReceive(form, order.id);
   const { formState, register } = form;
+  const { isDirty } = formState;
+  const progress = order.lines.reduce((sum, line) => sum + line.received, 0);
   const rows = form.getValues('rows');
+  const shown = useRef(progress);
+  useEffect(() => {
+    // Others receive too, and undo: the rows follow the order as long as nothing is typed into them.
+    if (isDirty || shown.current === progress) return;
+    shown.current = progress;
+    form.reset({ rows: rowsOf(order), note: '' });
+  }, [progress, isDirty, form, order]);
   const submit = form.handleSubmit(async (filled) => {
-    await receive(filled);
+    const answer = await receive(filled);
+    if (answer?.order) form.reset({ rows: rowsOf(answer.order), note: '' });
   });
   return (
     <section aria-labelledby="receive">
@@ -33,15 +42,15 @@ export function OrderReceive({ order }: { order: OrderView }) {
       <form onSubmit={(event) => void submit(event)} noValidate>
         <Stack gap="4">
           {rows.map((row, index) => (
-            <ReceiptRowFields key={row.lotId} form={form} index={index} legend={row.packName} />
+            <ReceiptRowFields
+              key={row.lotId}
+              form={form}
+              index={index}
+              legend={row.packName}
+              isOver={over.includes(index)}
+            />
           ))}
-          <TextField label="Note" {...register('note')} />
-          {moreThanOrdered && (
-            <chakra.label display="flex" gap="3" alignItems="center" minH="11">
-              <chakra.input type="checkbox" w="5" h="5" flex="none" {...register('overDeliveryOk')} />
-              More came than was ordered, and it is kept.
-            </chakra.label>
-          )}
+          <TextField label="Note" error={formState.errors.note?.message} {...register('note')} />
           <FormError message={formState.errors.root?.message} />
           <Box>
             <Button type="submit" minH="13" loading={formState.isSubmitting} loadingText="Receiving">

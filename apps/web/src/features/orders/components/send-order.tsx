@@ -2,7 +2,7 @@ import { Box, Button, chakra, Flex, Stack } from '@chakra-ui/react';
 import { useState } from 'react';
 import { newId } from '../../../shared/actions/send-action.js';
 import { showStrip } from '../../../shared/actions/strip.store.js';
-import { wordsOf } from '../../../shared/api/problem.js';
+import { isUncertain, wordsOf } from '../../../shared/api/problem.js';
 import type { OrderView } from '../../../shared/api/types.js';
 import { useMay } from '../../../shared/darkroom/darkroom-context.js';
 import { showMoney } from '../../../shared/formats/amounts.js';
@@ -42,7 +42,8 @@ export function SendOrder({ order, mailText, unsaved }: Props) {
       showStrip({ actionId, state: 'done', words, canUndo: false });
     } catch (error) {
       setProblem(wordsOf(error));
-      setActionId(newId());
+      // While nobody knows whether it went, only the same sending may be tried again: two ids could be two orders.
+      if (!isUncertain(error)) setActionId(newId());
     }
   };
   return (

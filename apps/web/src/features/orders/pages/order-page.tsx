@@ -56,7 +56,6 @@ function Order({ data }: { data: OrderPageData }) {
   const [unsaved, setUnsaved] = useState(false);
   const { order, mailText } = data;
   const isOpen = order.state === 'draft' || order.state === 'sent';
-  const progress = order.lines.reduce((sum, line) => sum + line.received, 0);
   return (
     <>
       <PageHeading title={`Order ${order.numberText}, ${order.supplier.name}`} says={stateWords[order.state]}>
@@ -79,7 +78,7 @@ function Order({ data }: { data: OrderPageData }) {
       >
         <Box>
           {order.state === 'draft' ? (
-            <DraftForm key={order.revision} order={order} onDirty={setUnsaved} />
+            <DraftForm key={order.id} order={order} onDirty={setUnsaved} />
           ) : (
             <OrderLines order={order} />
           )}
@@ -87,7 +86,7 @@ function Order({ data }: { data: OrderPageData }) {
         </Box>
         <Box>
           {order.state === 'draft' && <SendOrder order={order} mailText={mailText} unsaved={unsaved} />}
-          {order.state === 'sent' && <OrderReceive key={progress} order={order} />}
+          {order.state === 'sent' && <OrderReceive key={order.id} order={order} />}
           {isOpen && <OutUntilRows order={order} />}
         </Box>
       </Grid>

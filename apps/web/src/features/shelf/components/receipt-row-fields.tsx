@@ -14,8 +14,12 @@ interface Props {
   legend: string;
   /** Given where the pack is chosen here; without it the row belongs to a line of an order. */
   packs?: readonly ShelfPack[];
+  /** More came than was ordered: asked here, at its count. */
+  isOver?: boolean;
 }
 
+/** The most that the server takes of a lot number, in characters. */
+const MOST_LOT = 60;
 const whole = /^\d{1,3}$/;
 const isPast = (expiresOn: string, now: LocalDate): boolean => expiresOn !== '' && expiresOn < now;
 
@@ -29,7 +33,7 @@ function PastDate() {
 }
 
 /** What came of one pack: how many, which lot, until when. */
-export function ReceiptRowFields({ form, index, legend, packs }: Props) {
+export function ReceiptRowFields({ form, index, legend, packs, isOver = false }: Props) {
   const { register, formState, getValues } = form;
   const { zone } = useDarkroom();
   const expiresOn = useWatch({ control: form.control, name: `rows.${index}.expiresOn` });
@@ -65,8 +69,11 @@ export function ReceiptRowFields({ form, index, legend, packs }: Props) {
             error={errors?.lotNumber?.message}
             {...register(`rows.${index}.lotNumber`, {
               validate: (text) => {
-                const row = getValues(`rows.${index}`);
-                return !hasCome(row) || text.trim() !== '' || 'Copy the lot number from the pack.';
+                const { length } = text.trim();
+                if (length > MOST_LOT) return `${MOST_LOT} characters at the most; this is ${length}.`;
+                return (
+                  !hasCome(getValues(`rows.${index}`)) || length > 0 || 'Copy the lot number from the pack.'
+                );
               },
             })}
           />
@@ -79,6 +86,19 @@ export function ReceiptRowFields({ form, index, legend, packs }: Props) {
             {...register(`rows.${index}.expiresOn`)}
           />
         </Grid>
+        {isOver && (
+          <chakra.label display="flex" gap="3" alignItems="center" minH="11">
+            <chakra.input
+              type="checkbox"
+              w="5"
+              h="5"
+              flex="none"
+              accentColor="{colors.brand}"
+              {...register(`rows.${index}.moreIsRight`)}
+            />
+            More came than was ordered, and it is kept.
+          </chakra.label>
+        )}
       </chakra.fieldset>
     </Box>
   );

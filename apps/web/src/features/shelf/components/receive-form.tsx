@@ -16,7 +16,7 @@ export function ReceiveForm({ packs }: { packs: readonly ShelfPack[] }) {
   const navigate = useNavigate();
   const first = packs[0]?.id ?? '';
   const form = useForm<ReceiptForm>({
-    defaultValues: { rows: [emptyRow(first)], note: '', overDeliveryOk: false },
+    defaultValues: { rows: [emptyRow(first)], note: '' },
   });
   const { fields, append, remove } = useFieldArray({ control: form.control, name: 'rows' });
   const { receive } = useReceive(form, null);
