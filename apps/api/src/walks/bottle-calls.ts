@@ -47,6 +47,7 @@ export const aboutBottles: readonly RepositoryCalls[] = [
   ),
   callsOf(ChemistriesRepository)({
     version: (i) => [i.darkroomId, i.versionId],
+    documents: (i) => [i.darkroomId, [i.versionId]],
     current: (i) => [i.darkroomId],
     fromPacks: (i) => [i.darkroomId],
     lastNumbers: (i) => [i.darkroomId, ['FX']],

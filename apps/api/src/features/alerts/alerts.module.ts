@@ -1,4 +1,5 @@
 import { Module } from '@nestjs/common';
+import { ChemistriesModule } from '../chemistries/chemistries.module.js';
 import { EventsRepository } from './events.repository.js';
 import { FactsRepository } from './facts.repository.js';
 import { NeedsYouController } from './needs-you.controller.js';
@@ -11,6 +12,7 @@ import { WarningMails } from './warning-mails.service.js';
 import { WarningsService } from './warnings.service.js';
 
 @Module({
+  imports: [ChemistriesModule],
   controllers: [NeedsYouController],
   providers: [
     WarningsService,

@@ -2,7 +2,8 @@ import { Injectable } from '@nestjs/common';
 import { sql, type SQL } from 'drizzle-orm';
 import type { Tx } from '../../platform/database/database.js';
 import type { Touched } from '../../platform/ledger/void-handlers.js';
-import type { AlertFacts } from './alert-facts.js';
+import { ChemistryDocuments } from '../chemistries/chemistry-documents.js';
+import type { AlertFacts, BottleFacts } from './alert-facts.js';
 
 const listOf = (ids: readonly string[]): SQL =>
   sql.join(
@@ -18,10 +19,10 @@ const bottlesOf =
   (darkroomId: string) =>
   (ids: SQL): SQL => sql`
   select json_agg(json_build_object(
-    'id', b.id, 'code', b.code, 'document', v.document, 'totals', t.totals, 'holdBy', m.display_name))
+    'id', b.id, 'code', b.code, 'chemistryVersionId', b.chemistry_version_id, 'totals', t.totals,
+    'holdBy', m.display_name))
   from bottles b
   join bottle_totals t on t.darkroom_id = b.darkroom_id and t.bottle_id = b.id
-  join chemistry_versions v on v.darkroom_id = b.darkroom_id and v.id = b.chemistry_version_id
   left join actions a on a.darkroom_id = b.darkroom_id and a.id = (t.totals #>> '{hold,actionId}')::uuid
   left join memberships m on m.darkroom_id = a.darkroom_id and m.id = a.membership_id
   where b.darkroom_id = ${darkroomId} and b.id in (${ids})`;
@@ -70,8 +71,13 @@ const eventsOf =
     from events where darkroom_id = ${darkroomId} and subject_id in (${ids})
     order by subject_id, kind, crossing desc) e`;
 
+type FoundBottle = Omit<BottleFacts, 'document'> & { chemistryVersionId: string };
+type FoundFacts = Omit<AlertFacts, 'bottles'> & { bottles: FoundBottle[] };
+
 @Injectable()
 export class FactsRepository {
+  constructor(private readonly documents: ChemistryDocuments) {}
+
   /** Everything that warnings about these subjects are judged by, in one statement. Unknown ids are left out. */
   async read(
     tx: Tx,
@@ -79,12 +85,12 @@ export class FactsRepository {
     { bottleIds, packIds, loadActionIds }: Touched,
   ): Promise<AlertFacts> {
     const all = [...bottleIds, ...packIds, ...loadActionIds];
-    const [row] = await tx.execute<Record<string, unknown> & AlertFacts>(sql`select
+    const [row] = await tx.execute<Record<string, unknown> & FoundFacts>(sql`select
       ${orNone(bottleIds, bottlesOf(darkroomId))} as bottles,
       ${orNone(packIds, packsOf(darkroomId))} as packs,
       ${orNone(loadActionIds, loadsOf(darkroomId))} as loads,
       ${orNone(all, eventsOf(darkroomId))} as events`);
     if (!row) throw new Error('A select without a from gave no row.');
-    return row;
+    return { ...row, bottles: await this.documents.with(tx, darkroomId, row.bottles) };
   }
 }

@@ -1,4 +1,5 @@
 import { Module } from '@nestjs/common';
+import { ChemistriesModule } from '../chemistries/chemistries.module.js';
 import { LogModule } from '../log/log.module.js';
 import { BottleFactsRepository } from './bottle-facts.repository.js';
 import { BottleLedger } from './bottle-ledger.js';
@@ -8,7 +9,7 @@ import { BottlesService } from './bottles.service.js';
 
 /** The bottles, their ledger and their pages. */
 @Module({
-  imports: [LogModule],
+  imports: [ChemistriesModule, LogModule],
   controllers: [BottlesController],
   providers: [BottleLedger, BottleFactsRepository, BottlesRepository, BottlesService],
   exports: [BottleLedger, BottleFactsRepository, BottlesRepository, BottlesService],

@@ -5,6 +5,7 @@ import { and, asc, eq, inArray, sql } from 'drizzle-orm';
 import { alias } from 'drizzle-orm/pg-core';
 import { validate } from 'uuid';
 import type { Tx } from '../../platform/database/database.js';
+import { ChemistryDocuments } from '../chemistries/chemistry-documents.js';
 import type { LockedBottle } from './bottle-row.js';
 
 /** Totals as they are to be written. */
@@ -24,16 +25,17 @@ const isInUse = (totals: BottleTotals | null): boolean => totals !== null && tot
 
 @Injectable()
 export class BottlesRepository {
+  constructor(private readonly documents: ChemistryDocuments) {}
+
   /** Locks the totals of these bottles, in the order of their ids, and reads what their rules need. Unknown ids are left out. */
   async lock(tx: Tx, darkroomId: string, ids: readonly string[]): Promise<LockedBottle[]> {
-    return tx
+    const rows = await tx
       .select({
         id: bottles.id,
         code: bottles.code,
         material: bottles.material,
         chemistryVersionId: bottles.chemistryVersionId,
         chemistryId: chemistryVersions.chemistryId,
-        document: chemistryVersions.document,
         madeByActionId: bottles.madeByActionId,
         madeAt: actions.happenedAt,
         totals: bottleTotals.totals,
@@ -57,6 +59,7 @@ export class BottlesRepository {
       .where(and(eq(bottleTotals.darkroomId, darkroomId), inArray(bottleTotals.bottleId, [...ids])))
       .orderBy(asc(bottleTotals.bottleId))
       .for('no key update', { of: bottleTotals });
+    return this.documents.with(tx, darkroomId, rows);
   }
 
   async insert(tx: Tx, row: typeof bottles.$inferInsert): Promise<void> {
@@ -113,12 +116,11 @@ export class BottlesRepository {
         : which === 'all'
           ? sql`${bottleTotals.totals} is not null`
           : inArray(bottles.id, [...which.ids]);
-    return tx
+    const rows = await tx
       .select({
         id: bottles.id,
         code: bottles.code,
         chemistryVersionId: bottles.chemistryVersionId,
-        document: chemistryVersions.document,
         material: bottles.material,
         totals: bottleTotals.totals,
         costMinor: bottles.costMinor,
@@ -130,13 +132,6 @@ export class BottlesRepository {
       .innerJoin(
         bottleTotals,
         and(eq(bottleTotals.darkroomId, bottles.darkroomId), eq(bottleTotals.bottleId, bottles.id)),
-      )
-      .innerJoin(
-        chemistryVersions,
-        and(
-          eq(chemistryVersions.darkroomId, bottles.darkroomId),
-          eq(chemistryVersions.id, bottles.chemistryVersionId),
-        ),
       )
       .innerJoin(
         actions,
@@ -156,6 +151,7 @@ export class BottlesRepository {
       )
       .where(and(eq(bottles.darkroomId, darkroomId), wanted))
       .orderBy(asc(bottles.code));
+    return this.documents.with(tx, darkroomId, rows);
   }
 
   async findId(tx: Tx, darkroomId: string, idOrCode: string): Promise<string | null> {

@@ -3,12 +3,13 @@ import { DarkroomsModule } from '../darkrooms/darkrooms.module.js';
 import { ChemistriesController } from './chemistries.controller.js';
 import { ChemistriesRepository } from './chemistries.repository.js';
 import { ChemistriesService } from './chemistries.service.js';
+import { ChemistryDocuments } from './chemistry-documents.js';
 import { StarterService } from './starter.service.js';
 
 @Module({
   imports: [DarkroomsModule],
   controllers: [ChemistriesController],
-  providers: [ChemistriesRepository, ChemistriesService, StarterService],
-  exports: [ChemistriesRepository],
+  providers: [ChemistriesRepository, ChemistryDocuments, ChemistriesService, StarterService],
+  exports: [ChemistriesRepository, ChemistryDocuments],
 })
 export class ChemistriesModule {}

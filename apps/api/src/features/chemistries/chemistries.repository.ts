@@ -24,6 +24,14 @@ export class ChemistriesRepository {
     return row ?? null;
   }
 
+  /** Of those versions that are here; in no order. */
+  async documents(tx: Tx, darkroomId: string, ids: readonly string[]) {
+    return tx
+      .select({ id: chemistryVersions.id, document: chemistryVersions.document })
+      .from(chemistryVersions)
+      .where(and(eq(chemistryVersions.darkroomId, darkroomId), inArray(chemistryVersions.id, [...ids])));
+  }
+
   /** The newest version of every chemistry that the darkroom uses. */
   async current(tx: Tx, darkroomId: string): Promise<ChemistryVersion[]> {
     const rows = await tx

@@ -9,9 +9,12 @@ export type NewStep = typeof loadSteps.$inferInsert;
 @Injectable()
 export class LoadsRepository {
   async insert(tx: Tx, load: typeof loads.$inferInsert, film: NewFilm[], steps: NewStep[]): Promise<void> {
-    await tx.insert(loads).values(load);
-    await tx.insert(loadFilm).values(film);
-    await tx.insert(loadSteps).values(steps);
+    // Sent together, carried out in this order.
+    await Promise.all([
+      tx.insert(loads).values(load),
+      tx.insert(loadFilm).values(film),
+      tx.insert(loadSteps).values(steps),
+    ]);
   }
 
   /** A guest comes with the load that first names them; named again, what is known stays. */

@@ -125,17 +125,20 @@ export class LoadsService implements OnModuleInit {
   }
 
   private async answer(tx: Tx, me: Me, actionId: string): Promise<LoadAnswer> {
-    const load = await this.repository.load(tx, me.darkroomId, actionId);
+    const [load, film, steps, action] = await Promise.all([
+      this.repository.load(tx, me.darkroomId, actionId),
+      this.repository.film(tx, me.darkroomId, actionId),
+      this.repository.steps(tx, me.darkroomId, actionId),
+      this.views.one(tx, me, actionId),
+    ]);
     if (!load) throw problem('not-found');
-    const film = await this.repository.film(tx, me.darkroomId, actionId);
-    const steps = await this.repository.steps(tx, me.darkroomId, actionId);
     const views = await this.bottles.views(
       tx,
       me.darkroomId,
       steps.map((step) => step.bottleId),
     );
     return {
-      action: await this.views.one(tx, me, actionId),
+      action,
       load: { flags: load.flags, note: load.note, film, steps },
       bottles: views,
     };

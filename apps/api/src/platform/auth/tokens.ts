@@ -1,6 +1,6 @@
 import { Injectable } from '@nestjs/common';
 import { JwtService } from '@nestjs/jwt';
-import { createHash, randomBytes } from 'node:crypto';
+import { createHash, createSecretKey, randomBytes } from 'node:crypto';
 import { validate } from 'uuid';
 import { Environment } from '../../config/environment.js';
 import { Clock } from '../clock/clock.js';
@@ -22,12 +22,16 @@ interface Verified {
 
 @Injectable()
 export class Tokens {
-  private readonly jwt = new JwtService();
+  private readonly jwt: JwtService;
 
   constructor(
     private readonly environment: Environment,
     private readonly clock: Clock,
-  ) {}
+  ) {
+    // As a key object: a text would be tried as a public key first, at every request.
+    const key = createSecretKey(Buffer.from(environment.sessionSecret));
+    this.jwt = new JwtService({ secretOrKeyProvider: () => key });
+  }
 
   access({ personId, sessionId }: AccessClaims): string {
     return this.sign('access+jwt', { sub: personId, sid: sessionId }, ACCESS_S);
@@ -59,7 +63,6 @@ export class Tokens {
     return this.jwt.sign(
       { ...claims, iat, exp: iat + seconds },
       {
-        secret: this.environment.sessionSecret,
         algorithm: 'HS256',
         issuer: this.environment.publicOrigin,
         audience: AUDIENCE,
@@ -71,7 +74,6 @@ export class Tokens {
   private verify(type: TokenType, token: string): Record<string, unknown> | null {
     try {
       const { header, payload } = this.jwt.verify<Verified>(token, {
-        secret: this.environment.sessionSecret,
         algorithms: ['HS256'],
         issuer: this.environment.publicOrigin,
         audience: AUDIENCE,

@@ -22,31 +22,42 @@ export interface House {
 
 @Injectable()
 export class HouseRepository {
+  /** What a transaction has read: its several judges are to judge by the same rules. */
+  private readonly known = new WeakMap<Tx, Map<string, Promise<House>>>();
+
   /** @throws Error when the transaction is not inside that darkroom, or it has no rules. */
-  async read(tx: Tx, darkroomId: string): Promise<House> {
-    const [row] = await tx
-      .select({
-        darkroomName: darkrooms.name,
-        shortName: darkrooms.shortName,
-        zone: darkrooms.zone,
-        rules: darkroomSettings,
-      })
-      .from(darkroomSettings)
-      .innerJoin(darkrooms, eq(darkrooms.id, darkroomSettings.darkroomId))
-      .where(eq(darkroomSettings.darkroomId, darkroomId))
-      .prepare('read_house')
-      .execute();
-    if (!row) throw new Error(`Darkroom ${darkroomId} has no rules here.`);
-    const { rules, ...names } = row;
-    const { lowShareE4, lowRollsE4, nearDaysMax, nearShareE4 } = rules;
-    return {
-      darkroomId,
-      ...names,
-      thresholds: { lowShareE4, lowRollsE4, nearDaysMax, nearShareE4 },
-      smallestTankUl: rules.smallestTankUl,
-      temperatureUnit: rules.temperatureUnit,
-      volumeUnit: rules.volumeUnit,
-      currency: rules.currency,
-    };
+  read(tx: Tx, darkroomId: string): Promise<House> {
+    const known = this.known.get(tx) ?? new Map<string, Promise<House>>();
+    this.known.set(tx, known);
+    const house = known.get(darkroomId) ?? findHouse(tx, darkroomId);
+    known.set(darkroomId, house);
+    return house;
   }
+}
+
+async function findHouse(tx: Tx, darkroomId: string): Promise<House> {
+  const [row] = await tx
+    .select({
+      darkroomName: darkrooms.name,
+      shortName: darkrooms.shortName,
+      zone: darkrooms.zone,
+      rules: darkroomSettings,
+    })
+    .from(darkroomSettings)
+    .innerJoin(darkrooms, eq(darkrooms.id, darkroomSettings.darkroomId))
+    .where(eq(darkroomSettings.darkroomId, darkroomId))
+    .prepare('read_house')
+    .execute();
+  if (!row) throw new Error(`Darkroom ${darkroomId} has no rules here.`);
+  const { rules, ...names } = row;
+  const { lowShareE4, lowRollsE4, nearDaysMax, nearShareE4 } = rules;
+  return {
+    darkroomId,
+    ...names,
+    thresholds: { lowShareE4, lowRollsE4, nearDaysMax, nearShareE4 },
+    smallestTankUl: rules.smallestTankUl,
+    temperatureUnit: rules.temperatureUnit,
+    volumeUnit: rules.volumeUnit,
+    currency: rules.currency,
+  };
 }
