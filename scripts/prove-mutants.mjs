@@ -1,53 +1,41 @@
-// node scripts/prove-mutants.mjs: each lock of a darkroom taken out for a moment, on a database of the tests' own, and
-// whether the walk that guards it says so. Writes docs/proofs/mutants.md out of the tests' own report.
-import { mkdirSync, readFileSync, writeFileSync } from 'node:fs';
-import { basename } from 'node:path';
+// npm run prove:mutants: each promise broken for a moment, and whether the test that guards it says so. Runs all tests
+// and writes docs/proofs/mutants.md out of their reports; `-- --from-reports` takes the reports of the last npm test.
+import { mkdirSync, writeFileSync } from 'node:fs';
 import { performance } from 'node:perf_hooks';
-import { Cluster } from './lib/database.mjs';
 import { at, local } from './lib/paths.mjs';
+import { testsIn } from './lib/reports.mjs';
 import { read, run } from './lib/run.mjs';
-import { begin, say } from './lib/say.mjs';
+import { begin, say, Trouble } from './lib/say.mjs';
+
+/** @typedef {import('./lib/reports.mjs').Test} Test */
 
 /** Tests of this name break something and ask whether it is seen. */
-const BREAKS = /the walk sees|^the check at the start refuses/;
+const BREAKS = /the walk sees|the check at the start refuses|mutant: /;
+const PARTS = ['pure', 'postgresql', 'web', 'browser'];
 
-/**
- * @typedef {object} Test
- * @property {string} file
- * @property {string} name
- * @property {boolean} passed
- */
-
-/** @param {string} file @returns {Test[]} */
-function testsOf(file) {
-  const { testResults } = JSON.parse(readFileSync(file, 'utf8'));
-  return testResults.flatMap((/** @type {any} */ suite) =>
-    suite.assertionResults.map((/** @type {any} */ one) => ({
-      file: basename(suite.name),
-      name: one.fullName,
-      passed: one.status === 'passed',
-    })),
-  );
-}
+/** @param {string} name */
+const what = (name) => name.replace(/^.*(the walk sees( in)?|mutant:) /, '').replaceAll('|', '\\|');
 
 /** @param {Test[]} tests @param {string} of */
 function page(tests, of) {
   const day = new Date(performance.timeOrigin + performance.now()).toISOString().slice(0, 10);
   const broken = tests.filter(({ name }) => BREAKS.test(name));
-  /** @param {Test} test */
-  const line = ({ file, name, passed }) =>
-    `| ${name.replace(/^.*the walk sees( in)? /, '').replaceAll('|', '\\|')} | ${file} | ${passed ? 'seen' : 'NOT SEEN'} |`;
-  return `# Mutants: a lock taken out is seen
+  const others = tests.length - broken.length;
+  const red = tests.filter(({ name, passed }) => !BREAKS.test(name) && !passed).length;
+  const rows = broken
+    .sort((a, b) => a.file.localeCompare(b.file))
+    .map(({ file, name, passed }) => `| ${what(name)} | ${file} | ${passed ? 'seen' : 'NOT SEEN'} |`);
+  return `# Mutants: a promise broken is seen
 
-${day}, commit ${of}. Made by \`node scripts/prove-mutants.mjs\`.
+${day}, commit ${of}. Made by \`npm run prove:mutants\`.
 
-Each test below breaks one thing that keeps darkrooms apart — in a transaction that is rolled back, in a route or a
-repository that only the test brings along, or in a copy of an answer — and the walk that guards it must complain. The
-same walks over the program as it is found nothing: ${tests.length - broken.length} tests, ${tests.filter(({ name, passed }) => !BREAKS.test(name) && !passed).length} failed.
+Each test below breaks one thing — in a transaction that is rolled back, in a route, a repository or a copy of the built
+server that only the test brings along, in a copy of an answer — and the test that guards it must complain. The same
+tests over the program as it is: ${others} tests, ${red} failed.
 
 | what is broken | test file | |
 | --- | --- | --- |
-${broken.map(line).join('\n')}
+${rows.join('\n')}
 
 ${broken.length} mutants, ${broken.filter(({ passed }) => passed).length} seen.
 `;
@@ -58,24 +46,17 @@ await begin(async () => {
     (await read('git', ['-C', at(), ...args])).output.trim();
   const loose = (await git('status', '--porcelain')) === '' ? '' : ', with changes that were not committed';
   const of = (await git('rev-parse', '--short', 'HEAD')) + loose;
-  const cluster = new Cluster('test');
-  const logins = process.env['DATABASE_SUPER_URL'] ? {} : await cluster.start();
-  const file = local('mutants.json');
-  try {
-    const jest = [at('node_modules/jest/bin/jest.js'), '-c', 'jest.config.mjs', '--selectProjects', 'pg'];
-    const which = ['--testPathPatterns', 'walks/|start-checks', '--json', `--outputFile=${file}`];
-    const code = await run(process.execPath, [...jest, ...which], { env: { ...process.env, ...logins } });
-    const tests = testsOf(file);
-    mkdirSync(at('docs', 'proofs'), { recursive: true });
-    writeFileSync(at('docs', 'proofs', 'mutants.md'), page(tests, of));
-    await run(process.execPath, [
-      at('node_modules/prettier/bin/prettier.cjs'),
-      '--write',
-      at('docs/proofs/mutants.md'),
-    ]);
-    say(`docs/proofs/mutants.md: ${tests.length} tests.`);
-    return code;
-  } finally {
-    if (cluster.startedHere) await cluster.stop();
-  }
+  const again = !process.argv.includes('--from-reports');
+  const code = again ? await run(process.execPath, [at('scripts/test.mjs'), ...PARTS]) : 0;
+  const tests = testsIn(local('test-results'));
+  if (tests.length === 0) throw new Trouble('There is no report: run npm test first.');
+  mkdirSync(at('docs', 'proofs'), { recursive: true });
+  writeFileSync(at('docs', 'proofs', 'mutants.md'), page(tests, of));
+  await run(process.execPath, [
+    at('node_modules/prettier/bin/prettier.cjs'),
+    '--write',
+    at('docs/proofs/mutants.md'),
+  ]);
+  say(`docs/proofs/mutants.md: ${tests.length} tests.`);
+  return code;
 });

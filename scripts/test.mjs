@@ -7,6 +7,7 @@ import { build } from './lib/build.mjs';
 import { checkCount, jestCount, playwrightCount } from './lib/counts.mjs';
 import { Cluster } from './lib/database.mjs';
 import { at, local } from './lib/paths.mjs';
+import { slowestFiles } from './lib/reports.mjs';
 import { read, run } from './lib/run.mjs';
 import { begin, say, secondsSince, Trouble } from './lib/say.mjs';
 
@@ -150,6 +151,10 @@ async function main() {
     });
   }
   if (database && cluster.startedHere) await cluster.stop();
+  const slowest = slowestFiles(results, 10).map(
+    ({ name, ms }) => `  ${(ms / 1000).toFixed(1).padStart(6)} s  ${name}`,
+  );
+  if (slowest.length > 0) say(`\nThe slowest files:\n${slowest.join('\n')}`);
   if (red.length > 0) say(`\nFailed: ${red.join(', ')}. The reports are in ${results}.`);
   say(`\n${total.passed} passed, ${total.failed} failed`);
   return total.failed === 0 ? 0 : 1;
