@@ -4,6 +4,9 @@ export type LocalDate = string;
 const DAY_MS = 86_400_000;
 const pattern = /^(\d{4})-(\d{2})-(\d{2})$/;
 const formats = new Map<string, Intl.DateTimeFormat>();
+/** The same few days are asked for at each look at a bottle. */
+const starts = new Map<string, string>();
+const STARTS_KEPT = 2_000;
 
 /** Making a format costs far more than using it, and a darkroom has one zone. */
 function formatFor(zone: string): Intl.DateTimeFormat {
@@ -47,16 +50,15 @@ export function instantMs(iso: string): number {
 
 /** Whole days from 1970-01-01. Throws RangeError when the text is not a date of the calendar. */
 function dayNumber(date: LocalDate): number {
-  const ms = pattern.test(date) ? Date.parse(`${date}T00:00:00Z`) : Number.NaN;
-  if (Number.isNaN(ms) || isoDate(ms) !== date) throw new RangeError(`not a date: ${date}`);
-  return ms / DAY_MS;
+  if (!isLocalDate(date)) throw new RangeError(`not a date: ${date}`);
+  return Date.parse(`${date}T00:00:00Z`) / DAY_MS;
 }
 
 /** Whether the text is a date of the calendar. */
 export function isLocalDate(text: string): boolean {
   if (!pattern.test(text)) return false;
-  const ms = Date.parse(`${text}T00:00:00Z`);
-  return !Number.isNaN(ms) && isoDate(ms) === text;
+  // A day that its month does not have is read as one of the next month.
+  return new Date(`${text}T00:00:00Z`).getUTCDate() === Number(text.slice(8));
 }
 
 /** The date on the wall at that instant. Throws RangeError for a bad instant or zone. */
@@ -69,6 +71,16 @@ export function localDate(instantIso: string, zone: string): LocalDate {
  * begins with its first minute; where a zone skips the whole date, with the first instant after it.
  */
 export function startOfDay(date: LocalDate, zone: string): string {
+  const key = `${date} ${zone}`;
+  const known = starts.get(key);
+  if (known !== undefined) return known;
+  const start = findStartOfDay(date, zone);
+  if (starts.size >= STARTS_KEPT) starts.clear();
+  starts.set(key, start);
+  return start;
+}
+
+function findStartOfDay(date: LocalDate, zone: string): string {
   const utcMidnight = dayNumber(date) * DAY_MS;
   const offsetAt = (ms: number): number => wallClock(ms, zone) - ms;
   const before = offsetAt(utcMidnight - DAY_MS);

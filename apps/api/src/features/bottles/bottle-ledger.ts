@@ -37,7 +37,11 @@ export class BottleLedger {
    */
   async lock(tx: Tx, darkroomId: string, ids: readonly string[]): Promise<LockedBottle[]> {
     const unique = [...new Set(ids)];
-    const locked = await this.bottles.lock(tx, darkroomId, unique);
+    // The rules of the house are asked for on the way: whatever moves the totals judges by them.
+    const [locked] = await Promise.all([
+      this.bottles.lock(tx, darkroomId, unique),
+      this.houses.read(tx, darkroomId),
+    ]);
     if (locked.length !== unique.length) throw problem('not-found');
     return locked;
   }

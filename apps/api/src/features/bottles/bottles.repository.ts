@@ -1,10 +1,11 @@
 import { Injectable } from '@nestjs/common';
 import type { BottleTotals } from '@wetside/chemistry';
 import { actions, bottles, bottleTotals, chemistryVersions, counters, memberships } from '@wetside/db';
-import { and, asc, eq, inArray, sql } from 'drizzle-orm';
+import { and, asc, eq, sql, type SQL } from 'drizzle-orm';
 import { alias } from 'drizzle-orm/pg-core';
 import { validate } from 'uuid';
 import type { Tx } from '../../platform/database/database.js';
+import { hotQuery, isAnyOf } from '../../platform/database/hot-query.js';
 import { ChemistryDocuments } from '../chemistries/chemistry-documents.js';
 import type { LockedBottle } from './bottle-row.js';
 
@@ -23,42 +24,93 @@ export type BottleDetail = Awaited<ReturnType<BottlesRepository['details']>>[num
 
 const isInUse = (totals: BottleTotals | null): boolean => totals !== null && totals.discardedAt === null;
 
+const lockBottles = hotQuery('lock_bottles', (db) =>
+  db
+    .select({
+      id: bottles.id,
+      code: bottles.code,
+      material: bottles.material,
+      chemistryVersionId: bottles.chemistryVersionId,
+      chemistryId: chemistryVersions.chemistryId,
+      madeByActionId: bottles.madeByActionId,
+      madeAt: actions.happenedAt,
+      totals: bottleTotals.totals,
+    })
+    .from(bottleTotals)
+    .innerJoin(
+      bottles,
+      and(eq(bottles.darkroomId, bottleTotals.darkroomId), eq(bottles.id, bottleTotals.bottleId)),
+    )
+    .innerJoin(
+      chemistryVersions,
+      and(
+        eq(chemistryVersions.darkroomId, bottles.darkroomId),
+        eq(chemistryVersions.id, bottles.chemistryVersionId),
+      ),
+    )
+    .innerJoin(
+      actions,
+      and(eq(actions.darkroomId, bottles.darkroomId), eq(actions.id, bottles.madeByActionId)),
+    )
+    .where(
+      and(eq(bottleTotals.darkroomId, sql.placeholder('darkroomId')), isAnyOf(bottleTotals.bottleId, 'ids')),
+    )
+    .orderBy(asc(bottleTotals.bottleId))
+    .for('no key update', { of: bottleTotals }),
+);
+
+/** The bottles' pages, by which of them are wanted. */
+const details = (name: string, wanted: SQL) =>
+  hotQuery(name, (db) =>
+    db
+      .select({
+        id: bottles.id,
+        code: bottles.code,
+        chemistryVersionId: bottles.chemistryVersionId,
+        material: bottles.material,
+        totals: bottleTotals.totals,
+        costMinor: bottles.costMinor,
+        currency: bottles.currency,
+        mixedBy: mixers.displayName,
+        holdBy: holders.displayName,
+      })
+      .from(bottles)
+      .innerJoin(
+        bottleTotals,
+        and(eq(bottleTotals.darkroomId, bottles.darkroomId), eq(bottleTotals.bottleId, bottles.id)),
+      )
+      .innerJoin(
+        actions,
+        and(eq(actions.darkroomId, bottles.darkroomId), eq(actions.id, bottles.madeByActionId)),
+      )
+      .innerJoin(mixers, and(eq(mixers.darkroomId, actions.darkroomId), eq(mixers.id, actions.membershipId)))
+      .leftJoin(
+        holdActions,
+        and(
+          eq(holdActions.darkroomId, bottles.darkroomId),
+          sql`${holdActions.id} = (${bottleTotals.totals} -> 'hold' ->> 'actionId')::uuid`,
+        ),
+      )
+      .leftJoin(
+        holders,
+        and(eq(holders.darkroomId, holdActions.darkroomId), eq(holders.id, holdActions.membershipId)),
+      )
+      .where(and(eq(bottles.darkroomId, sql.placeholder('darkroomId')), wanted))
+      .orderBy(asc(bottles.code)),
+  );
+const detailsOf = {
+  'in-use': details('bottles_in_use', sql`${bottleTotals.inUse}`),
+  all: details('bottles_all', sql`${bottleTotals.totals} is not null`),
+};
+const detailsNamed = details('bottles_named', isAnyOf(bottles.id, 'ids'));
+
 @Injectable()
 export class BottlesRepository {
   constructor(private readonly documents: ChemistryDocuments) {}
 
   /** Locks the totals of these bottles, in the order of their ids, and reads what their rules need. Unknown ids are left out. */
   async lock(tx: Tx, darkroomId: string, ids: readonly string[]): Promise<LockedBottle[]> {
-    const rows = await tx
-      .select({
-        id: bottles.id,
-        code: bottles.code,
-        material: bottles.material,
-        chemistryVersionId: bottles.chemistryVersionId,
-        chemistryId: chemistryVersions.chemistryId,
-        madeByActionId: bottles.madeByActionId,
-        madeAt: actions.happenedAt,
-        totals: bottleTotals.totals,
-      })
-      .from(bottleTotals)
-      .innerJoin(
-        bottles,
-        and(eq(bottles.darkroomId, bottleTotals.darkroomId), eq(bottles.id, bottleTotals.bottleId)),
-      )
-      .innerJoin(
-        chemistryVersions,
-        and(
-          eq(chemistryVersions.darkroomId, bottles.darkroomId),
-          eq(chemistryVersions.id, bottles.chemistryVersionId),
-        ),
-      )
-      .innerJoin(
-        actions,
-        and(eq(actions.darkroomId, bottles.darkroomId), eq(actions.id, bottles.madeByActionId)),
-      )
-      .where(and(eq(bottleTotals.darkroomId, darkroomId), inArray(bottleTotals.bottleId, [...ids])))
-      .orderBy(asc(bottleTotals.bottleId))
-      .for('no key update', { of: bottleTotals });
+    const rows = await lockBottles(tx, { darkroomId, ids: [...ids] });
     return this.documents.with(tx, darkroomId, rows);
   }
 
@@ -110,47 +162,10 @@ export class BottlesRepository {
 
   /** All bottles in use, or all there ever were, or those named. Bottles whose mix was voided only when named. */
   async details(tx: Tx, darkroomId: string, which: { ids: readonly string[] } | 'in-use' | 'all') {
-    const wanted =
-      which === 'in-use'
-        ? eq(bottleTotals.inUse, true)
-        : which === 'all'
-          ? sql`${bottleTotals.totals} is not null`
-          : inArray(bottles.id, [...which.ids]);
-    const rows = await tx
-      .select({
-        id: bottles.id,
-        code: bottles.code,
-        chemistryVersionId: bottles.chemistryVersionId,
-        material: bottles.material,
-        totals: bottleTotals.totals,
-        costMinor: bottles.costMinor,
-        currency: bottles.currency,
-        mixedBy: mixers.displayName,
-        holdBy: holders.displayName,
-      })
-      .from(bottles)
-      .innerJoin(
-        bottleTotals,
-        and(eq(bottleTotals.darkroomId, bottles.darkroomId), eq(bottleTotals.bottleId, bottles.id)),
-      )
-      .innerJoin(
-        actions,
-        and(eq(actions.darkroomId, bottles.darkroomId), eq(actions.id, bottles.madeByActionId)),
-      )
-      .innerJoin(mixers, and(eq(mixers.darkroomId, actions.darkroomId), eq(mixers.id, actions.membershipId)))
-      .leftJoin(
-        holdActions,
-        and(
-          eq(holdActions.darkroomId, bottles.darkroomId),
-          sql`${holdActions.id} = (${bottleTotals.totals} -> 'hold' ->> 'actionId')::uuid`,
-        ),
-      )
-      .leftJoin(
-        holders,
-        and(eq(holders.darkroomId, holdActions.darkroomId), eq(holders.id, holdActions.membershipId)),
-      )
-      .where(and(eq(bottles.darkroomId, darkroomId), wanted))
-      .orderBy(asc(bottles.code));
+    const rows =
+      typeof which === 'string'
+        ? await detailsOf[which](tx, { darkroomId })
+        : await detailsNamed(tx, { darkroomId, ids: [...which.ids] });
     return this.documents.with(tx, darkroomId, rows);
   }
 

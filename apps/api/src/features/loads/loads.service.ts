@@ -50,7 +50,7 @@ export class LoadsService implements OnModuleInit {
       enter,
       put,
       (tx, recording) => this.count(tx, recording, put.content),
-      (tx, me) => this.answer(tx, me, put.id),
+      (tx, me) => this.answer(tx, me, put.id, put.content.bottleIds),
     );
     return recorded.catch(refuseUnknown);
   }
@@ -124,23 +124,19 @@ export class LoadsService implements OnModuleInit {
     return touched({ bottleIds: locked.map((bottle) => bottle.id), loadActionIds: [target.id] });
   }
 
-  private async answer(tx: Tx, me: Me, actionId: string): Promise<LoadAnswer> {
-    const [load, film, steps, action] = await Promise.all([
+  private async answer(tx: Tx, me: Me, actionId: string, bottleIds: readonly string[]): Promise<LoadAnswer> {
+    const [load, film, steps, action, bottles] = await Promise.all([
       this.repository.load(tx, me.darkroomId, actionId),
       this.repository.film(tx, me.darkroomId, actionId),
       this.repository.steps(tx, me.darkroomId, actionId),
       this.views.one(tx, me, actionId),
+      this.bottles.views(tx, me.darkroomId, bottleIds),
     ]);
     if (!load) throw problem('not-found');
-    const views = await this.bottles.views(
-      tx,
-      me.darkroomId,
-      steps.map((step) => step.bottleId),
-    );
     return {
       action,
       load: { flags: load.flags, note: load.note, film, steps },
-      bottles: views,
+      bottles,
     };
   }
 }

@@ -1,14 +1,49 @@
 import { Injectable } from '@nestjs/common';
 import { darkrooms, memberships, people, sessions } from '@wetside/db';
-import { and, eq, isNull } from 'drizzle-orm';
+import { and, eq, gt, isNull, sql } from 'drizzle-orm';
 import { validate } from 'uuid';
 import { Clock } from '../clock/clock.js';
 import { Database, type TransactionOptions, type Tx } from '../database/database.js';
+import { hotQuery } from '../database/hot-query.js';
 import { problem } from '../errors/problem.js';
 import type { CallerInfo } from './caller.js';
 import type { Me } from './me.js';
 import { reaches } from './roles.js';
-import { sessionIsAlive } from './sessions.repository.js';
+import { aliveSince } from './sessions.repository.js';
+
+/** Every request of a darkroom begins with it. */
+const enterDarkroom = hotQuery('enter_darkroom', (db) =>
+  db
+    .select({
+      darkroomId: darkrooms.id,
+      darkroomName: darkrooms.name,
+      shortName: darkrooms.shortName,
+      zone: darkrooms.zone,
+      membershipId: memberships.id,
+      role: memberships.role,
+      displayName: memberships.displayName,
+    })
+    .from(sessions)
+    .innerJoin(people, and(eq(people.id, sessions.personId), isNull(people.deletedAt)))
+    .leftJoin(
+      memberships,
+      and(
+        eq(memberships.darkroomId, sql.placeholder('darkroomId')),
+        eq(memberships.personId, sessions.personId),
+        isNull(memberships.leftAt),
+      ),
+    )
+    .leftJoin(darkrooms, eq(darkrooms.id, memberships.darkroomId))
+    .where(
+      and(
+        eq(sessions.id, sql.placeholder('sessionId')),
+        eq(sessions.personId, sql.placeholder('personId')),
+        isNull(sessions.endedAt),
+        gt(sessions.lastUsedAt, sql.param(sql.placeholder('usedAfter'), sessions.lastUsedAt)),
+        gt(sessions.createdAt, sql.param(sql.placeholder('madeAfter'), sessions.createdAt)),
+      ),
+    ),
+);
 
 /** The one door to a darkroom's rows for a signed-in person. */
 @Injectable()
@@ -46,37 +81,13 @@ export class DarkroomAccess {
   }
 
   private async membership(tx: Tx, caller: CallerInfo, darkroomId: string): Promise<Me> {
-    const [row] = await tx
-      .select({
-        darkroomId: darkrooms.id,
-        darkroomName: darkrooms.name,
-        shortName: darkrooms.shortName,
-        zone: darkrooms.zone,
-        membershipId: memberships.id,
-        role: memberships.role,
-        displayName: memberships.displayName,
-      })
-      .from(sessions)
-      .innerJoin(people, and(eq(people.id, sessions.personId), isNull(people.deletedAt)))
-      .leftJoin(
-        memberships,
-        and(
-          eq(memberships.darkroomId, darkroomId),
-          eq(memberships.personId, sessions.personId),
-          isNull(memberships.leftAt),
-        ),
-      )
-      .leftJoin(darkrooms, eq(darkrooms.id, memberships.darkroomId))
-      .where(
-        and(
-          eq(sessions.id, caller.sessionId),
-          eq(sessions.personId, caller.personId),
-          sessionIsAlive(this.clock.now()),
-        ),
-      )
-      // Named, so that its plan is kept: every request of a darkroom begins with it.
-      .prepare('enter_darkroom')
-      .execute();
+    const { sessionId, personId } = caller;
+    const [row] = await enterDarkroom(tx, {
+      darkroomId,
+      sessionId,
+      personId,
+      ...aliveSince(this.clock.now()),
+    });
     if (!row) throw problem('session-ended');
     const { membershipId, role, displayName, darkroomName, shortName, zone } = row;
     if (membershipId === null || role === null || displayName === null) throw problem('not-found');

@@ -10,12 +10,15 @@ const before = (now: Date, seconds: number) => new Date(now.getTime() - seconds 
 
 /** A session that has not ended, was used lately, and is not older than any session may be. */
 export function sessionIsAlive(now: Date) {
-  return and(
-    isNull(sessions.endedAt),
-    gt(sessions.lastUsedAt, before(now, REFRESH_IDLE_S)),
-    gt(sessions.createdAt, before(now, SESSION_S)),
-  );
+  const { usedAfter, madeAfter } = aliveSince(now);
+  return and(isNull(sessions.endedAt), gt(sessions.lastUsedAt, usedAfter), gt(sessions.createdAt, madeAfter));
 }
+
+/** A session that is alive was used, and was made, after these. */
+export const aliveSince = (now: Date) => ({
+  usedAfter: before(now, REFRESH_IDLE_S),
+  madeAfter: before(now, SESSION_S),
+});
 
 @Injectable()
 export class SessionsRepository {

@@ -1,8 +1,9 @@
 import { Injectable } from '@nestjs/common';
 import type { Thresholds } from '@wetside/chemistry';
 import { darkrooms, darkroomSettings } from '@wetside/db';
-import { eq } from 'drizzle-orm';
+import { eq, sql } from 'drizzle-orm';
 import type { Tx } from '../database/database.js';
+import { hotQuery } from '../database/hot-query.js';
 
 /** A darkroom and its rules, as everything that judges a bottle or writes to its people needs them. */
 export interface House {
@@ -35,8 +36,8 @@ export class HouseRepository {
   }
 }
 
-async function findHouse(tx: Tx, darkroomId: string): Promise<House> {
-  const [row] = await tx
+const readHouse = hotQuery('read_house', (db) =>
+  db
     .select({
       darkroomName: darkrooms.name,
       shortName: darkrooms.shortName,
@@ -45,9 +46,11 @@ async function findHouse(tx: Tx, darkroomId: string): Promise<House> {
     })
     .from(darkroomSettings)
     .innerJoin(darkrooms, eq(darkrooms.id, darkroomSettings.darkroomId))
-    .where(eq(darkroomSettings.darkroomId, darkroomId))
-    .prepare('read_house')
-    .execute();
+    .where(eq(darkroomSettings.darkroomId, sql.placeholder('darkroomId'))),
+);
+
+async function findHouse(tx: Tx, darkroomId: string): Promise<House> {
+  const [row] = await readHouse(tx, { darkroomId });
   if (!row) throw new Error(`Darkroom ${darkroomId} has no rules here.`);
   const { rules, ...names } = row;
   const { lowShareE4, lowRollsE4, nearDaysMax, nearShareE4 } = rules;

@@ -1,8 +1,9 @@
 import { Injectable } from '@nestjs/common';
 import { actions, memberships, voids } from '@wetside/db';
-import { and, eq, inArray } from 'drizzle-orm';
+import { and, eq, sql } from 'drizzle-orm';
 import { alias } from 'drizzle-orm/pg-core';
 import type { Tx } from '../database/database.js';
+import { hotQuery, isAnyOf } from '../database/hot-query.js';
 
 export type ActionRow = typeof actions.$inferSelect;
 export type NewAction = typeof actions.$inferInsert;
@@ -16,15 +17,44 @@ export interface ActionWithPeople {
 const voidActions = alias(actions, 'void_actions');
 const voiders = alias(memberships, 'voiders');
 
+const findAction = hotQuery('find_action', (db) =>
+  db
+    .select()
+    .from(actions)
+    .where(and(eq(actions.darkroomId, sql.placeholder('darkroomId')), eq(actions.id, sql.placeholder('id')))),
+);
+
+const actionsWithPeople = hotQuery('actions_with_people', (db) =>
+  db
+    .select({
+      action: actions,
+      displayName: memberships.displayName,
+      voidActionId: voids.actionId,
+      voidReason: voids.reason,
+      voidedAt: voidActions.recordedAt,
+      voiderName: voiders.displayName,
+    })
+    .from(actions)
+    .innerJoin(
+      memberships,
+      and(eq(memberships.darkroomId, actions.darkroomId), eq(memberships.id, actions.membershipId)),
+    )
+    .leftJoin(voids, and(eq(voids.darkroomId, actions.darkroomId), eq(voids.voidedActionId, actions.id)))
+    .leftJoin(
+      voidActions,
+      and(eq(voidActions.darkroomId, voids.darkroomId), eq(voidActions.id, voids.actionId)),
+    )
+    .leftJoin(
+      voiders,
+      and(eq(voiders.darkroomId, voidActions.darkroomId), eq(voiders.id, voidActions.membershipId)),
+    )
+    .where(and(eq(actions.darkroomId, sql.placeholder('darkroomId')), isAnyOf(actions.id, 'ids'))),
+);
+
 @Injectable()
 export class ActionsRepository {
   async find(tx: Tx, darkroomId: string, id: string): Promise<ActionRow | null> {
-    const [row] = await tx
-      .select()
-      .from(actions)
-      .where(and(eq(actions.darkroomId, darkroomId), eq(actions.id, id)))
-      .prepare('find_action')
-      .execute();
+    const [row] = await findAction(tx, { darkroomId, id });
     return row ?? null;
   }
 
@@ -64,30 +94,7 @@ export class ActionsRepository {
   /** These actions with who did them and, where it was so, who took them back. In no order. */
   async withPeople(tx: Tx, darkroomId: string, ids: readonly string[]): Promise<ActionWithPeople[]> {
     if (ids.length === 0) return [];
-    const rows = await tx
-      .select({
-        action: actions,
-        displayName: memberships.displayName,
-        voidActionId: voids.actionId,
-        voidReason: voids.reason,
-        voidedAt: voidActions.recordedAt,
-        voiderName: voiders.displayName,
-      })
-      .from(actions)
-      .innerJoin(
-        memberships,
-        and(eq(memberships.darkroomId, actions.darkroomId), eq(memberships.id, actions.membershipId)),
-      )
-      .leftJoin(voids, and(eq(voids.darkroomId, actions.darkroomId), eq(voids.voidedActionId, actions.id)))
-      .leftJoin(
-        voidActions,
-        and(eq(voidActions.darkroomId, voids.darkroomId), eq(voidActions.id, voids.actionId)),
-      )
-      .leftJoin(
-        voiders,
-        and(eq(voiders.darkroomId, voidActions.darkroomId), eq(voiders.id, voidActions.membershipId)),
-      )
-      .where(and(eq(actions.darkroomId, darkroomId), inArray(actions.id, [...ids])));
+    const rows = await actionsWithPeople(tx, { darkroomId, ids: [...ids] });
     return rows.map((row) => ({
       action: row.action,
       displayName: row.displayName,
