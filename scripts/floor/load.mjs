@@ -12,13 +12,11 @@ const order = JSON.parse(process.argv[2] ?? '{}');
 const { person, darkrooms } = JSON.parse(readFileSync(order.file, 'utf8'));
 const agent = new Agent({ keepAlive: true, maxSockets: order.connections });
 const origin = new URL(order.origin);
-let asked = 0;
 let cookie = '';
 
 /** @param {string} method @param {string} path @param {object} [body] @returns {Promise<Answer>} */
 function ask(method, path, body) {
   const text = body ? JSON.stringify(body) : '';
-  asked += 1;
   /** @type {Record<string, string | number>} */
   const headers = { 'sec-fetch-site': 'same-origin', cookie };
   if (body)
@@ -82,12 +80,19 @@ if (order.signIn) {
   if (status !== 200) throw new Error(`Sign-in: ${status} ${text}`);
   cookie = cookies.map((line) => line.split(';')[0]).join('; ');
 }
-await round(order.warmUp ?? 2);
+/** Milliseconds of processor that the server has used. */
+function serverCpu() {
+  const fields = (readFileSync(`/proc/${order.pid}/stat`, 'utf8').split(') ')[1] ?? '').split(' ');
+  return (Number(fields[11]) + Number(fields[12])) * 10;
+}
+await round(1);
+const before = serverCpu();
 const { took, seconds } = await round(order.seconds);
+const cpuMs = (serverCpu() - before) / took.length;
 took.sort((a, b) => a - b);
 const part = (/** @type {number} */ share) =>
   took[Math.min(took.length - 1, Math.floor(took.length * share))] ?? 0;
 process.stdout.write(
-  `${JSON.stringify({ requests: took.length, requestsInAll: asked, perSecond: took.length / seconds, p50: part(0.5), p99: part(0.99) })}\n`,
+  `${JSON.stringify({ requests: took.length, perSecond: took.length / seconds, p50: part(0.5), p99: part(0.99), cpuMs })}\n`,
 );
 agent.destroy();

@@ -1,6 +1,5 @@
 // Both programs on one database and pool, and the rounds of requests put to them in turn.
 import { spawn } from 'node:child_process';
-import { readFileSync } from 'node:fs';
 import { setTimeout as wait } from 'node:timers/promises';
 import { at } from '../lib/paths.mjs';
 import { freePort } from '../lib/ports.mjs';
@@ -12,6 +11,7 @@ import { Trouble } from '../lib/say.mjs';
 
 const STEP_MS = 100;
 const STARTS_WITHIN_MS = 30_000;
+const WARM_UP_S = 15;
 
 /** @param {string} name @param {string[]} args @param {(port: number) => NodeJS.ProcessEnv} env @param {{ path?: string, signIn?: boolean }} [how] @returns {Promise<Server>} */
 export async function startServer(name, args, env, { path = '/', signIn = false } = {}) {
@@ -37,20 +37,12 @@ export async function startServer(name, args, env, { path = '/', signIn = false 
   return { name, origin, signIn, pid: child.pid ?? 0, stop: () => void child.kill('SIGTERM') };
 }
 
-/** Milliseconds of processor that a process has used. @param {number} pid */
-function cpuOf(pid) {
-  const fields = (readFileSync(`/proc/${pid}/stat`, 'utf8').split(') ')[1] ?? '').split(' ');
-  return (Number(fields[11]) + Number(fields[12])) * 10;
-}
-
 /** @param {Server} server @param {object} order @returns {Promise<Round>} */
 async function oneRound(server, order) {
-  const before = cpuOf(server.pid);
-  const full = { file: server.file, ...order, origin: server.origin, signIn: server.signIn };
+  const full = { file: server.file, ...order, origin: server.origin, signIn: server.signIn, pid: server.pid };
   const { code, output } = await read(process.execPath, [at('scripts/floor/load.mjs'), JSON.stringify(full)]);
   if (code !== 0) throw new Trouble(`${server.name}: ${output}`);
-  const round = JSON.parse(output.split('\n').find((line) => line.startsWith('{')) ?? '{}');
-  return { ...round, cpuMs: (cpuOf(server.pid) - before) / round.requestsInAll };
+  return JSON.parse(output.split('\n').find((line) => line.startsWith('{')) ?? '{}');
 }
 
 /** @param {number[]} values */
@@ -64,6 +56,8 @@ export const median = (values) => [...values].sort((a, b) => a - b)[Math.floor(v
 export async function inTurn(servers, order, rounds) {
   /** @type {Record<string, Round[]>} */
   const all = Object.fromEntries(servers.map(({ name }) => [name, []]));
+  // A program that is just compiled is slow at first; that is not what is asked.
+  for (const server of servers) await oneRound(server, { ...order, seconds: WARM_UP_S });
   for (let n = 0; n < rounds; n += 1) {
     for (const server of servers) all[server.name]?.push(await oneRound(server, order));
   }

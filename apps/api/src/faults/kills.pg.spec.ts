@@ -39,7 +39,7 @@ describe('eight people tick loads and', () => {
   });
 });
 
-describe('mutant: the comparison complains of', () => {
+describe('the comparison complains of', () => {
   const sent = [
     { id: 'a', bottleIds: ['x'], body: '', answered: true },
     { id: 'b', bottleIds: ['x', 'y'], body: '', answered: false },
@@ -77,7 +77,7 @@ describe('mutant: the comparison complains of', () => {
       { ...stored, totals: [{ bottleId: 'x', loads: 2, usedE4: 20_000 }] },
       'Bottle x counts 2 loads',
     ],
-  ])('%s', (_, found, sentence) => {
+  ])('mutant: %s', (_, found, sentence) => {
     expect(compare(sent, found)).toContainEqual(expect.stringContaining(sentence));
   });
 });

@@ -97,6 +97,7 @@ it(
         JSON.stringify({ seed, seconds, ...fuzzed, reconciled, ready: after.status }),
       );
     expect(fuzzed.complaints).toEqual([]);
+    expect(Object.keys(attempts).filter((route) => !(route in fuzzed.byRoute))).toEqual([]);
     expect(reconciled.differences).toEqual([]);
     expect(after.status).toBe(200);
     process.stdout.write(`${fuzzed.requests} requests, seed ${seed}: ${JSON.stringify(fuzzed.byCode)}\n`);

@@ -1,59 +1,32 @@
 import { screen, waitFor } from '@testing-library/react';
 import { describe, expect, it } from 'vitest';
-import type { OrderPageData, OrderView } from '../shared/api/types.js';
+import type { OrderPageData } from '../shared/api/types.js';
 import { fakeApi } from '../testing/fake-api.js';
 import { darkroom, me } from '../testing/fixtures.js';
+import { order } from '../testing/order-fixtures.js';
 import { renderAt } from '../testing/render-at.js';
 
-const draft: OrderView = {
-  id: 'o-2',
-  number: 2,
-  numberText: '0002',
-  supplier: { id: 's-1', name: 'Low Quay Supplies', email: 'orders@lowquay.example' },
-  state: 'draft',
-  currency: 'EUR',
-  note: null,
-  revision: 1,
-  draftedBy: 'Tomas',
-  draftedAt: '2026-12-01T09:00:00.000Z',
-  sentBy: null,
-  sentAt: null,
-  totalMinor: 3_450,
-  lines: [
-    {
-      id: 'l-1',
-      supplierPackId: 'sp-1',
-      packId: 'p-1',
-      packName: 'Rapid fixer concentrate, 1 L',
-      supplierName: 'LQ 17 rapid fixer, litre',
-      count: 3,
-      priceMinor: 1_150,
-      received: 0,
-      cancelled: 0,
-    },
-  ],
-  mail: null,
-};
+const draft = order('draft');
 
 function openDraft() {
-  let order = draft;
+  let shown = draft;
   const api = fakeApi({
     'GET /me': () => ({ body: me('manager') }),
     'GET /darkrooms/harbour': () => ({ body: darkroom('manager') }),
     'GET /darkrooms/harbour/suppliers': () => ({ body: { suppliers: [] } }),
     'GET /darkrooms/harbour/orders/o-2': () => ({
-      body: { order, mailText: 'Please send' } satisfies OrderPageData,
+      body: { order: shown, mailText: 'Please send' } satisfies OrderPageData,
     }),
     'PATCH /darkrooms/harbour/orders/o-2': () => {
-      order = {
+      shown = {
         ...draft,
         revision: 2,
         totalMinor: 4_600,
         lines: draft.lines.map((line) => ({ ...line, count: 4 })),
       };
-      return { body: { order } };
+      return { body: { order: shown } };
     },
-    'PUT /darkrooms/harbour/order-sendings/*': () => ({ body: { order: { ...order, state: 'sent' } } }),
+    'PUT /darkrooms/harbour/order-sendings/*': () => ({ body: { order: { ...shown, state: 'sent' } } }),
   });
   return { api, ...renderAt('/d/harbour/orders/o-2') };
 }

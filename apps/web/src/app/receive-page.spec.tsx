@@ -2,24 +2,8 @@ import { fireEvent, screen, waitFor } from '@testing-library/react';
 import { expect, it } from 'vitest';
 import { fakeApi } from '../testing/fake-api.js';
 import { darkroom, me } from '../testing/fixtures.js';
+import { pack } from '../testing/order-fixtures.js';
 import { renderAt } from '../testing/render-at.js';
-import type { ShelfPack } from '../shared/api/types.js';
-
-const pack: ShelfPack = {
-  id: 'p-1',
-  name: 'Rapid fixer concentrate, 1 L',
-  form: 'concentrate',
-  reorderPoint: 1,
-  reorderUpTo: 2,
-  unopened: 0,
-  onOrder: 0,
-  advice: { due: false, quantity: 0, reason: '' },
-  firstExpiry: null,
-  parts: [],
-  makes: [],
-  lots: [],
-  soldBy: [],
-};
 
 it('warns that an expiry date is past, and takes it all the same', async () => {
   const api = fakeApi({

@@ -1,8 +1,8 @@
 import { fireEvent, screen } from '@testing-library/react';
-import type { ChemistryView, LogEntry, NeedsYouRow, ShelfPack } from '../shared/api/types.js';
+import type { ChemistryView, LogEntry, NeedsYouRow } from '../shared/api/types.js';
 import type { Handler } from './fake-api.js';
 import { actionView, bottle, fixer } from './fixtures.js';
-import { body, inside, order, orderPage } from './order-fixtures.js';
+import { body, inside, order, orderPage, pack } from './order-fixtures.js';
 
 /** A form, how to come to it filled in rightly, and what it must not take. */
 export interface FormCase {
@@ -28,21 +28,6 @@ const page = (shown: typeof held) =>
   body({ bottle: shown, document: fixer, history: [], today: '2026-12-01' });
 const bottleAt = (shown: typeof held) => ({ ...inside, 'GET /darkrooms/harbour/bottles/FX-01': page(shown) });
 
-const pack: ShelfPack = {
-  id: 'p-1',
-  name: 'Rapid fixer concentrate, 1 L',
-  form: 'concentrate',
-  reorderPoint: 1,
-  reorderUpTo: 2,
-  unopened: 0,
-  onOrder: 0,
-  advice: { due: false, quantity: 0, reason: '' },
-  firstExpiry: null,
-  parts: [],
-  makes: [],
-  lots: [],
-  soldBy: [],
-};
 const chemistry: ChemistryView = {
   id: 'c-1',
   versionId: 'v-1',

@@ -1,9 +1,26 @@
-import type { OrderView } from '../shared/api/types.js';
+import type { OrderView, ShelfPack } from '../shared/api/types.js';
 import type { Handler } from './fake-api.js';
 import { darkroom, me } from './fixtures.js';
 
 /** An answer that is always the same. */
 export const body = (value: unknown) => () => ({ body: value });
+
+/** A pack of the shelf that nobody has a single one of. */
+export const pack: ShelfPack = {
+  id: 'p-1',
+  name: 'Rapid fixer concentrate, 1 L',
+  form: 'concentrate',
+  reorderPoint: 1,
+  reorderUpTo: 2,
+  unopened: 0,
+  onOrder: 0,
+  advice: { due: false, quantity: 0, reason: '' },
+  firstExpiry: null,
+  parts: [],
+  makes: [],
+  lots: [],
+  soldBy: [],
+};
 
 /** What every page of a darkroom asks for, as its manager. */
 export const inside = { 'GET /me': body(me('manager')), 'GET /darkrooms/harbour': body(darkroom('manager')) };

@@ -1,5 +1,9 @@
 import type { Clock } from '../../platform/clock/clock.js';
-import type { Person } from './houses.js';
+
+export interface Person {
+  email: string;
+  passphrase: string;
+}
 
 /** Somebody who is signed in at a running program. */
 export class Caller {

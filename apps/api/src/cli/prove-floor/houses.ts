@@ -7,12 +7,7 @@ import { ProvisionService } from '../../features/darkrooms/provision.service.js'
 import { Accounts } from '../../platform/auth/accounts.js';
 import { Clock } from '../../platform/clock/clock.js';
 import { Database } from '../../platform/database/database.js';
-import { Caller } from './caller.js';
-
-export interface Person {
-  email: string;
-  passphrase: string;
-}
+import { Caller, type Person } from './caller.js';
 
 /** A darkroom with a bottle of each chemistry of the starter catalogue, so large that no load ever spends it. */
 export interface FloorDarkroom {

@@ -2,8 +2,8 @@ import type { INestApplication } from '@nestjs/common';
 import { v7 } from 'uuid';
 import { Clock } from '../../platform/clock/clock.js';
 import { Database } from '../../platform/database/database.js';
-import { Caller } from './caller.js';
-import type { FloorDarkroom, Person } from './houses.js';
+import { Caller, type Person } from './caller.js';
+import type { FloorDarkroom } from './houses.js';
 
 interface Statement {
   text: string;
