@@ -58,11 +58,16 @@ insert into actions (darkroom_id, id, kind, v, happened_at, happened_on, recorde
 insert into loads (darkroom_id, action_id, flags) select darkroom_id, id, '{}' from told order by darkroom_id, n;
 insert into load_film (darkroom_id, action_id, ordinal, format, count, film_class, owner_membership_id)
   select darkroom_id, id, 0, '135-36', 1, 'conventional', membership_id from told order by darkroom_id, n;
+-- Built anew afterwards: many times faster than row by row, and the same in the end.
+alter table load_steps drop constraint load_steps_pk;
+drop index load_steps_by_bottle;
 insert into load_steps
     (darkroom_id, action_id, bottle_id, material, nominal_e4, factor_e4, counted_e4, taken_ul, flags)
   select t.darkroom_id, t.id, pg_temp.id(s.s, t.k, t.n / :loads_per_bottle), 'film', 10000, 10000, 10000, 0, '{}'
   from told t cross join generate_series(1, 3) s(s)
   order by t.darkroom_id, t.n, s.s;
+alter table load_steps add constraint load_steps_pk primary key (darkroom_id, action_id, bottle_id);
+create index load_steps_by_bottle on load_steps (darkroom_id, bottle_id, action_id);
 
 reset session_replication_role;
 -- Each step's bottle and load are there: what the foreign keys would have asked.

@@ -4,6 +4,7 @@ import { Buffer } from 'node:buffer';
 import { readFileSync } from 'node:fs';
 import { Agent, request } from 'node:http';
 import { performance } from 'node:perf_hooks';
+import { setTimeout as wait } from 'node:timers/promises';
 import { v7 } from 'uuid';
 
 /** @typedef {{ status: number, text: string, cookies: string[] }} Answer */
@@ -61,18 +62,24 @@ const once = (darkroom) =>
 async function round(seconds) {
   /** @type {number[]} */
   const took = [];
+  let refused = 0;
   const end = performance.now() + seconds * 1000;
   const began = performance.now();
   await Promise.all(
     Array.from({ length: order.connections }, async (_, n) => {
       for (let at = performance.now(); at < end; at = performance.now()) {
         const answer = await once(darkrooms[n % darkrooms.length]);
+        if (answer.status === 503) {
+          refused += 1;
+          await wait(1000);
+          continue;
+        }
         if (answer.status >= 300) throw new Error(`${answer.status} ${answer.text}`);
         took.push(performance.now() - at);
       }
     }),
   );
-  return { took, seconds: (performance.now() - began) / 1000 };
+  return { took, refused, seconds: (performance.now() - began) / 1000 };
 }
 
 if (order.signIn) {
@@ -87,12 +94,12 @@ function serverCpu() {
 }
 await round(1);
 const before = serverCpu();
-const { took, seconds } = await round(order.seconds);
+const { took, refused, seconds } = await round(order.seconds);
 const cpuMs = (serverCpu() - before) / took.length;
 took.sort((a, b) => a - b);
 const part = (/** @type {number} */ share) =>
   took[Math.min(took.length - 1, Math.floor(took.length * share))] ?? 0;
 process.stdout.write(
-  `${JSON.stringify({ requests: took.length, perSecond: took.length / seconds, p50: part(0.5), p99: part(0.99), cpuMs })}\n`,
+  `${JSON.stringify({ requests: took.length, perSecond: took.length / seconds, p50: part(0.5), p99: part(0.99), cpuMs, refused })}\n`,
 );
 agent.destroy();

@@ -25,6 +25,10 @@ export function page({ results, stores, frames, recorded, seconds, rounds }, of)
       by[`${who} on small`].perSecond / by[`${who} on large`].perSecond;
     return `| ${WHAT[kind]} | ${connections} | ${one(by['floor on large'].perSecond)} | ${times(grown('floor'))} | ${one(by['program on large'].perSecond)} | **${times(grown('program'))}** | ${one(by['program on large'].p50)} / ${one(by['program on large'].p99)} |`;
   });
+  let refused = 0;
+  for (const { by } of results)
+    for (const round of Object.values(/** @type {Record<string, { refused: number }>} */ (by)))
+      refused += round.refused;
   const frameRows = [
     ['node:http', frames.http],
     ['Express 5 with its JSON parser', frames.express],
@@ -52,7 +56,8 @@ no reckoning. 64 darkrooms with three bottles each; every connection stands in o
 | --- | ---: | ---: | ---: | ---: | ---: | ---: | ---: | ---: |
 ${floorRows.join('\n')}
 
-CPU: processor time of the server's process for one request, without PostgreSQL's.
+CPU: processor time of the server's process for one request, without PostgreSQL's. Answers of 503, in all rounds of all four
+servers: ${refused}.
 
 ## With ${large.steps.toLocaleString('en-GB')} load steps, their loads and actions
 

@@ -7,7 +7,7 @@ import { read } from '../lib/run.mjs';
 import { Trouble } from '../lib/say.mjs';
 
 /** @typedef {{ name: string, origin: string, signIn: boolean, pid: number, file?: string, stop: () => void }} Server */
-/** @typedef {{ perSecond: number, p50: number, p99: number, requests: number, cpuMs: number }} Round */
+/** @typedef {{ perSecond: number, p50: number, p99: number, requests: number, cpuMs: number, refused: number }} Round */
 
 const STEP_MS = 100;
 const STARTS_WITHIN_MS = 30_000;
@@ -63,11 +63,10 @@ export async function inTurn(servers, order, rounds) {
   }
   const keys = /** @type {const} */ (['requests', 'perSecond', 'p50', 'p99', 'cpuMs']);
   return Object.fromEntries(
-    Object.entries(all).map(([name, list]) => [
-      name,
-      /** @type {Round} */ (
-        Object.fromEntries(keys.map((key) => [key, median(list.map((one) => one[key]))]))
-      ),
-    ]),
+    Object.entries(all).map(([name, list]) => {
+      const middle = Object.fromEntries(keys.map((key) => [key, median(list.map((one) => one[key]))]));
+      const refused = list.reduce((sum, one) => sum + one.refused, 0);
+      return [name, /** @type {Round} */ ({ ...middle, refused })];
+    }),
   );
 }

@@ -47,7 +47,7 @@ it('a sheet’s side is a number of millimetres, and is complained of at its fie
   await user.click(screen.getByRole('radio', { name: 'Other sheet' }));
   const width = screen.getByLabelText('Width');
   fireEvent.change(screen.getByLabelText('Height'), { target: { value: '254' } });
-  for (const wrong of ['0', '-4', 'wide', '2001', '10000', '1e3']) {
+  for (const wrong of ['0', '-4', 'wide', '2001', '10000', '1e3', '10,000', '1,250', '1.250']) {
     fireEvent.change(width, { target: { value: wrong } });
     await waitFor(() => expect(width).toHaveAccessibleDescription('A number of mm, 1 to 2000.'));
     expect(width).toBeInvalid();

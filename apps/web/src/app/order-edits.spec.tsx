@@ -107,9 +107,17 @@ it('more than was ordered is asked about once, at its count, and then received',
   await user.click(screen.getByRole('button', { name: 'Receive these packs' }));
   await waitFor(() => expect(came).toHaveAccessibleDescription(/More than is open on the order\./));
   expect(came).toHaveFocus();
-  await user.click(screen.getByRole('checkbox', { name: 'More came than was ordered, and it is kept.' }));
+  const kept = () => screen.getByRole('checkbox', { name: 'More came than was ordered, and it is kept.' });
+  await user.click(kept());
+  // Said of 5, not of 50: another count is asked about anew.
+  fireEvent.change(came, { target: { value: '50' } });
   await user.click(screen.getByRole('button', { name: 'Receive these packs' }));
   await waitFor(() => expect(api.sent('PUT')).toHaveLength(2));
-  expect(asked).toMatchObject({ overDeliveryOk: true, lines: [{ count: 5 }] });
-  expect(await screen.findByText('5 packs are on the shelf.')).toBeVisible();
+  expect(asked).not.toHaveProperty('overDeliveryOk');
+  await waitFor(() => expect(kept()).not.toBeChecked());
+  await user.click(kept());
+  await user.click(screen.getByRole('button', { name: 'Receive these packs' }));
+  await waitFor(() => expect(api.sent('PUT')).toHaveLength(3));
+  expect(asked).toMatchObject({ overDeliveryOk: true, lines: [{ count: 50 }] });
+  expect(await screen.findByText('50 packs are on the shelf.')).toBeVisible();
 });

@@ -5,15 +5,12 @@ import type { Touched } from '../../platform/ledger/void-handlers.js';
 import { ChemistryDocuments } from '../chemistries/chemistry-documents.js';
 import type { AlertFacts, BottleFacts } from './alert-facts.js';
 
-const listOf = (ids: readonly string[]): SQL =>
-  sql.join(
-    ids.map((id) => sql`${id}::uuid`),
-    sql`, `,
-  );
+/** One array, however many there are: the statement stays the same, and its plan is kept. */
+const anyOf = (ids: readonly string[]): SQL => sql`any(${sql.param([...ids])}::uuid[])`;
 
 /** What is not asked for is not looked for. */
 const orNone = (ids: readonly string[], query: (ids: SQL) => SQL): SQL =>
-  ids.length === 0 ? sql`'[]'::json` : sql`coalesce((${query(listOf(ids))}), '[]'::json)`;
+  ids.length === 0 ? sql`'[]'::json` : sql`coalesce((${query(anyOf(ids))}), '[]'::json)`;
 
 const bottlesOf =
   (darkroomId: string) =>
@@ -25,7 +22,7 @@ const bottlesOf =
   join bottle_totals t on t.darkroom_id = b.darkroom_id and t.bottle_id = b.id
   left join actions a on a.darkroom_id = b.darkroom_id and a.id = (t.totals #>> '{hold,actionId}')::uuid
   left join memberships m on m.darkroom_id = a.darkroom_id and m.id = a.membership_id
-  where b.darkroom_id = ${darkroomId} and b.id in (${ids})`;
+  where b.darkroom_id = ${darkroomId} and b.id = ${ids}`;
 
 const packsOf =
   (darkroomId: string) =>
@@ -41,7 +38,7 @@ const packsOf =
       join orders r on r.darkroom_id = o.darkroom_id and r.id = o.order_id and r.state = 'sent'
       where s.darkroom_id = p.darkroom_id and s.pack_id = p.id)))
   from packs p
-  where p.darkroom_id = ${darkroomId} and p.id in (${ids})`;
+  where p.darkroom_id = ${darkroomId} and p.id = ${ids}`;
 
 const loadsOf =
   (darkroomId: string) =>
@@ -60,7 +57,7 @@ const loadsOf =
       from load_film f where f.darkroom_id = a.darkroom_id and f.action_id = a.id)))
   from actions a
   join memberships m on m.darkroom_id = a.darkroom_id and m.id = a.membership_id
-  where a.darkroom_id = ${darkroomId} and a.kind = 'load' and a.id in (${ids})`;
+  where a.darkroom_id = ${darkroomId} and a.kind = 'load' and a.id = ${ids}`;
 
 const eventsOf =
   (darkroomId: string) =>
@@ -68,7 +65,7 @@ const eventsOf =
   select json_agg(e) from (
     select distinct on (subject_id, kind)
       id, kind, subject_id as "subjectId", crossing, ended_by as "endedBy"
-    from events where darkroom_id = ${darkroomId} and subject_id in (${ids})
+    from events where darkroom_id = ${darkroomId} and subject_id = ${ids}
     order by subject_id, kind, crossing desc) e`;
 
 type FoundBottle = Omit<BottleFacts, 'document'> & { chemistryVersionId: string };

@@ -90,14 +90,17 @@ export class DarkroomAccess {
     });
     if (!row) throw problem('session-ended');
     const { membershipId, role, displayName, darkroomName, shortName, zone } = row;
+    // As it is stored: in an address an id may stand in capitals.
+    const darkroomIdOf = row.darkroomId;
     if (membershipId === null || role === null || displayName === null) throw problem('not-found');
-    if (darkroomName === null || shortName === null || zone === null) throw problem('not-found');
+    if (darkroomIdOf === null || darkroomName === null || shortName === null || zone === null)
+      throw problem('not-found');
     return {
       membershipId,
       personId: caller.personId,
       role,
       displayName,
-      darkroomId,
+      darkroomId: darkroomIdOf,
       darkroomName,
       shortName,
       zone,

@@ -17,9 +17,19 @@ export class Passphrases {
 
   /** With no stored hash it works just as long and says no: the time taken does not tell who is known here. */
   async verify(stored: string | null, passphrase: string): Promise<boolean> {
-    this.decoy ??= this.hash('nobody has this passphrase');
-    const against = stored ?? (await this.decoy);
+    const nobodys = await this.nobodys();
+    const against = stored ?? nobodys;
     const same = await this.turnstile.pass(() => verify(against, passphrase.normalize('NFC')));
     return same && stored !== null;
+  }
+
+  private async nobodys(): Promise<string> {
+    this.decoy ??= this.hash('nobody has this passphrase');
+    try {
+      return await this.decoy;
+    } catch (error) {
+      this.decoy = null;
+      throw error;
+    }
   }
 }

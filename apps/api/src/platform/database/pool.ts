@@ -93,7 +93,8 @@ export class Pool {
         },
       });
     try {
-      return await this.client.begin(mode, (sql) => orNever(work(guard(sql))));
+      // Over with the work itself: what it left running must not follow the commit or the rollback.
+      return await this.client.begin(mode, (sql) => orNever(work(guard(sql)).finally(() => (over = true))));
     } finally {
       over = true;
     }

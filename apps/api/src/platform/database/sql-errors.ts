@@ -74,6 +74,8 @@ export function databaseTrouble(error: unknown): DatabaseTrouble | null {
 
 /** Whether other work over the same connections must be expected to fare no better. */
 export function isAboutConnection(error: unknown): boolean {
+  // It has no room for more (class 53): the connections that there are serve on.
+  if (sqlState(error)?.startsWith('53')) return false;
   const trouble = databaseTrouble(error);
   return trouble === 'unavailable' || trouble === 'interrupted' || error instanceof OutOfTime;
 }

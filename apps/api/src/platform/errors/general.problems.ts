@@ -1,7 +1,6 @@
 import type { ProblemKind } from './problem-kind.js';
 
-/** True of every action: its id makes it count once. */
-const AGAIN = 'Nothing is lost: send it again in a moment.';
+const AGAIN = 'Nothing was recorded: send it again in a moment.';
 
 export const generalProblems = {
   invalid: {
@@ -68,7 +67,7 @@ export const generalProblems = {
     status: 503,
     title: 'Broken off',
     detail: () =>
-      'The database went away in the middle of this. Send it again in a moment: it counts once, however often it is sent.',
+      'The database went away in the middle of this: nobody knows yet whether it was recorded. Send it again in a moment; an action counts once.',
   },
   busy: {
     status: 503,
@@ -83,6 +82,7 @@ export const generalProblems = {
   'too-slow': {
     status: 503,
     title: 'Took too long',
-    detail: () => `This took longer than it may and was given up. ${AGAIN}`,
+    detail: () =>
+      'This took longer than it may and was given up. Send it again in a moment; an action counts once.',
   },
 } satisfies Record<string, ProblemKind>;

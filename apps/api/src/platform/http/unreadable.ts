@@ -8,7 +8,7 @@ import { problem } from '../errors/problem.js';
  */
 export function answerUnreadable(server: Server): void {
   server.on('clientError', (error: NodeJS.ErrnoException, socket: Duplex) => {
-    if (error.code === 'ECONNRESET' || !socket.writable) return void socket.destroy();
+    if (error.code === 'ECONNRESET' || !socket.writable || hasBegun(socket)) return void socket.destroy();
     if (error.code === 'ERR_HTTP_REQUEST_TIMEOUT')
       return void socket.end('HTTP/1.1 408 Request Timeout\r\nConnection: close\r\n\r\n');
     const found = problem(error.code === 'HPE_HEADER_OVERFLOW' ? 'too-large' : 'malformed');
@@ -22,4 +22,10 @@ export function answerUnreadable(server: Server): void {
     ];
     socket.end(`${head.join('\r\n')}\r\n\r\n${body}`);
   });
+}
+
+/** An answer to an earlier request is on its way there: a second head inside it would be read as its body. */
+function hasBegun(socket: Duplex): boolean {
+  const answer = Reflect.get(socket, '_httpMessage') as { headersSent?: boolean } | null | undefined;
+  return answer?.headersSent === true;
 }

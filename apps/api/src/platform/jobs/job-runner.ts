@@ -4,6 +4,7 @@ import {
   type BeforeApplicationShutdown,
   type OnApplicationBootstrap,
 } from '@nestjs/common';
+import { setTimeout as later } from 'node:timers/promises';
 import { Logger as QueueLogger, run, type Runner, type TaskList } from 'graphile-worker';
 import { Environment } from '../../config/environment.js';
 import { JobTasks } from './job-tasks.js';
@@ -48,7 +49,8 @@ export class JobRunner implements OnApplicationBootstrap, BeforeApplicationShutd
       } catch (error) {
         this.log.error(`The queue is not running: ${error instanceof Error ? error.message : String(error)}`);
       }
-      await this.wait(AGAIN_MS);
+      // Cut short when it is to stop.
+      await later(AGAIN_MS, undefined, { signal: this.stopping.signal }).catch(() => undefined);
     }
   }
 
@@ -80,14 +82,5 @@ export class JobRunner implements OnApplicationBootstrap, BeforeApplicationShutd
     if (level === 'error') this.log.error(message);
     else if (level === 'warning') this.log.warn(message);
     else this.log.debug(message);
-  }
-
-  private wait(ms: number): Promise<void> {
-    const { signal } = this.stopping;
-    if (signal.aborted) return Promise.resolve();
-    return new Promise((resolve) => {
-      const timer = setTimeout(resolve, ms);
-      signal.addEventListener('abort', () => (clearTimeout(timer), resolve()), { once: true });
-    });
   }
 }

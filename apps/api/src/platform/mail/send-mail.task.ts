@@ -1,5 +1,6 @@
 import { Injectable, Logger, type OnModuleInit } from '@nestjs/common';
 import { randomUUID } from 'node:crypto';
+import { setTimeout as later } from 'node:timers/promises';
 import { Environment } from '../../config/environment.js';
 import { Clock } from '../clock/clock.js';
 import { Database, type Tx } from '../database/database.js';
@@ -13,6 +14,9 @@ import { parseSendMail, SEND_MAIL } from './send-mail.job.js';
 
 const LEASE_MS = 60_000;
 const ANSWER_LENGTH = 500;
+/** What is left of a lease when the deadline of the sending is over. */
+const MARK_TRIES = 20;
+const MARK_AGAIN_MS = 1_000;
 
 interface Leased {
   row: MailRow;
@@ -48,7 +52,20 @@ export class SendMailTask implements OnModuleInit {
   async run(key: MailKey): Promise<void> {
     const leased = await this.lease(key);
     if (!leased) return;
-    await this.mark(key, leased, await this.mailer.send(leased.row));
+    await this.markSurely(key, leased, await this.mailer.send(leased.row));
+  }
+
+  /** A busy database is asked again while the lease holds: a mail that is sent and not marked goes out once more. */
+  private async markSurely(key: MailKey, leased: Leased, sent: Sent): Promise<void> {
+    for (let tries = 1; ; tries += 1) {
+      try {
+        await this.mark(key, leased, sent);
+        return;
+      } catch (error) {
+        if (tries >= MARK_TRIES) throw error;
+        await later(MARK_AGAIN_MS);
+      }
+    }
   }
 
   private lease(key: MailKey): Promise<Leased | null> {
@@ -67,7 +84,8 @@ export class SendMailTask implements OnModuleInit {
         return null;
       }
       const leaseId = randomUUID();
-      const leaseUntil = new Date(now.getTime() + LEASE_MS);
+      // From here, not from when this began to wait for the row.
+      const leaseUntil = new Date(this.clock.now().getTime() + LEASE_MS);
       await this.repository.lease(tx, key, { leaseId, leaseUntil });
       await this.nextCheck.lower(tx, key.darkroomId, leaseUntil);
       return { row, leaseId, attempts: row.attempts + 1 };

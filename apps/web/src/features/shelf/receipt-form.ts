@@ -30,7 +30,7 @@ export const emptyRow = (packId: string, packName = ''): ReceiptRow => ({
 });
 
 /** A row that says nothing came is left out. */
-export const hasCome = (row: ReceiptRow): boolean => row.count.trim() !== '' && row.count.trim() !== '0';
+export const hasCome = (row: ReceiptRow): boolean => row.count.trim() !== '' && Number(row.count) !== 0;
 
 export function receiptLines(rows: readonly ReceiptRow[]): ReceiptLine[] {
   return rows.filter(hasCome).map((row) => ({

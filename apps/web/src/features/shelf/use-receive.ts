@@ -9,11 +9,19 @@ import { showProblem } from '../../shared/ui/form-problem.js';
 import { usePutReceipt } from './api/put-receipt.js';
 import { fieldOfReceipt, type ReceiptForm, receiptLines, rowsOverOrder } from './receipt-form.js';
 
+/** More came than was ordered: in which rows, and what all of them said then. */
+interface Asked {
+  rows: readonly number[];
+  counts: string;
+}
+const NOBODY: Asked = { rows: [], counts: '' };
+const countsIn = ({ rows }: ReceiptForm): string => rows.map(({ count }) => count.trim()).join(' ');
+
 /** Sends what came, once, and puts the server's objections into the form. `over`: the rows to ask about. */
 export function useReceive(form: UseFormReturn<ReceiptForm>, orderId: string | null) {
   const receipt = usePutReceipt();
   const [actionId, setActionId] = useState(newId);
-  const [over, setOver] = useState<readonly number[]>([]);
+  const [asked, setAsked] = useState(NOBODY);
 
   const receive = async (filled: ReceiptForm): Promise<ReceiptAnswer | null> => {
     const lines = receiptLines(filled.rows);
@@ -21,11 +29,16 @@ export function useReceive(form: UseFormReturn<ReceiptForm>, orderId: string | n
       form.setError('root', { message: 'Say of one pack at least how many came.' });
       return null;
     }
+    // The answer holds for the counts it was given to; another count is asked about anew.
+    const isRight =
+      asked.rows.length > 0 &&
+      asked.counts === countsIn(filled) &&
+      asked.rows.every((row) => filled.rows[row]?.moreIsRight);
     const content = {
       ...(orderId && { orderId }),
       lines,
       ...(filled.note.trim() && { note: filled.note.trim() }),
-      ...(over.length > 0 && over.every((row) => filled.rows[row]?.moreIsRight) && { overDeliveryOk: true }),
+      ...(isRight && { overDeliveryOk: true }),
     };
     try {
       const answer = await receipt.sendAndWait(actionId, content);
@@ -38,16 +51,19 @@ export function useReceive(form: UseFormReturn<ReceiptForm>, orderId: string | n
         canUndo: true,
       });
       setActionId(newId());
-      setOver([]);
+      setAsked(NOBODY);
       return answer;
     } catch (error) {
       if (error instanceof ProblemError && error.code === 'more-than-ordered') {
         const fields = error.fields.map(({ field }) => field.replace(/^content\./, ''));
-        setOver(rowsOverOrder(fields, filled.rows));
+        const rows = rowsOverOrder(fields, filled.rows);
+        if (asked.counts !== countsIn(filled))
+          for (const row of rows) form.setValue(`rows.${row}.moreIsRight`, false);
+        setAsked({ rows, counts: countsIn(filled) });
       }
       showProblem(error, form.setError, (field) => fieldOfReceipt(field, filled.rows));
       return null;
     }
   };
-  return { receive, over, isPending: receipt.isPending };
+  return { receive, over: asked.rows, isPending: receipt.isPending };
 }

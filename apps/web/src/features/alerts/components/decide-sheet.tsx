@@ -22,8 +22,10 @@ function DecideForm({ load, onClose }: Props) {
   const voiding = useVoid();
   const { register, handleSubmit, setError, formState } = useForm({ defaultValues: { reason: '' } });
   const { errors, isSubmitting } = formState;
-  const decide = (send: (reason: string) => Promise<void>) =>
+  const [pressed, setPressed] = useState<'accept' | 'void'>('accept');
+  const decide = (button: 'accept' | 'void', send: (reason: string) => Promise<void>) =>
     handleSubmit(async ({ reason }) => {
+      setPressed(button);
       try {
         await send(reason.trim());
         onClose();
@@ -31,14 +33,14 @@ function DecideForm({ load, onClose }: Props) {
         showProblem(error, setError, (field) => (field === 'reason' ? 'reason' : null));
       }
     });
-  const accept = decide((reason) =>
+  const accept = decide('accept', (reason) =>
     decision.sendFromSheet(
       ids.accept,
       { loadActionId: load.actionId, decision: 'accept', reason },
       { words: `The load of ${load.by} stands.` },
     ),
   );
-  const voidIt = decide((reason) =>
+  const voidIt = decide('void', (reason) =>
     voiding.sendFromSheet(
       ids.voided,
       { voidedActionId: load.actionId, reason },
@@ -58,10 +60,23 @@ function DecideForm({ load, onClose }: Props) {
           {...register('reason', reasonRules('Say why: it stays in the log.'))}
         />
         <FormError message={errors.root?.message} />
-        <Button type="submit" minH="13" loading={isSubmitting} loadingText="Recording">
+        <Button
+          type="submit"
+          minH="13"
+          disabled={isSubmitting}
+          loading={isSubmitting && pressed === 'accept'}
+          loadingText="Recording"
+        >
           Accept the load
         </Button>
-        <Button variant="outline" minH="13" disabled={isSubmitting} onClick={() => void voidIt()}>
+        <Button
+          variant="outline"
+          minH="13"
+          disabled={isSubmitting}
+          loading={isSubmitting && pressed === 'void'}
+          loadingText="Recording"
+          onClick={() => void voidIt()}
+        >
           Void the load
         </Button>
       </Stack>

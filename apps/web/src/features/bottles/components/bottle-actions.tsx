@@ -24,7 +24,8 @@ export function BottleActions({ standing }: { standing: Standing }) {
   const { bottle, document, assessment } = standing;
   const { code, totals } = bottle;
   const stands = totals.discardedAt === null;
-  const close = (): void => setDoing(null);
+  // The answer of one sheet may come when another is open.
+  const close = (sheet: Doing) => (): void => setDoing((now) => (now === sheet ? null : now));
   return (
     <Flex gap="3" wrap="wrap">
       {takesFilm(standing) && !assessment.closed && (
@@ -59,9 +60,9 @@ export function BottleActions({ standing }: { standing: Standing }) {
         </Button>
       )}
       <LazyLoadSheet sheet={sheet} standings={[standing]} />
-      <HoldSheet bottle={bottle} open={doing === 'hold'} onClose={close} />
-      <ReleaseSheet bottle={bottle} open={doing === 'release'} onClose={close} />
-      <DiscardSheet bottle={bottle} document={document} open={doing === 'discard'} onClose={close} />
+      <HoldSheet bottle={bottle} open={doing === 'hold'} onClose={close('hold')} />
+      <ReleaseSheet bottle={bottle} open={doing === 'release'} onClose={close('release')} />
+      <DiscardSheet bottle={bottle} document={document} open={doing === 'discard'} onClose={close('discard')} />
     </Flex>
   );
 }

@@ -38,7 +38,8 @@ function Side({ label, mm, onChange }: SideProps) {
   const wrong = typed.trim() !== '' && mm === undefined;
   const type = (text: string): void => {
     setTyped(text);
-    const size = /^\d{1,4}([.,]\d{1,3})?$/.test(text.trim()) ? Math.ceil(Number(text.replace(',', '.'))) : 0;
+    // Three figures after a comma are thousands to somebody: asked again, not guessed.
+    const size = /^\d{1,4}([.,]\d{1,2})?$/.test(text.trim()) ? Math.ceil(Number(text.replace(',', '.'))) : 0;
     onChange(size >= 1 && size <= MOST_MM ? size : undefined);
   };
   return (
