@@ -4,6 +4,7 @@ import { v7 } from 'uuid';
 import { TestApp } from '../../testing/test-app.js';
 import { until } from '../../testing/until.js';
 import type { Tx } from '../database/database.js';
+import { problem } from '../errors/problem.js';
 import { MailingServer } from './killed-server.fixture.js';
 import { MailsRepository, type MailKey, type MailRow } from './mails.repository.js';
 import { OutgoingMail, type NewMail } from './outgoing-mail.service.js';
@@ -57,6 +58,15 @@ class NoTakeover extends MailsRepository {
   }
 }
 
+/** Its database has no place the first times that a mail is to be marked. */
+class BusyAtMark extends MailsRepository {
+  times = 2;
+  override settle(...args: Parameters<MailsRepository['settle']>): Promise<boolean> {
+    this.times -= 1;
+    return this.times >= 0 ? Promise.reject(problem('busy')) : super.settle(...args);
+  }
+}
+
 describe('a mail that changes hands', () => {
   let world: TestApp;
   let darkroomId: string;
@@ -78,6 +88,14 @@ describe('a mail that changes hands', () => {
     cases.push(mail);
     return mail;
   }
+  it('does not, while its sender lives and only the database was busy: the mark is made a little later', async () => {
+    const mail = await post();
+    const busy = new BusyAtMark();
+    await mail.run(mail.sender(0, busy));
+    expect(busy.times).toBe(-1);
+    expect(await mail.row()).toMatchObject({ state: 'sent', attempts: 1, unclearTries: 0 });
+  });
+
   describe('because the server that had it was killed', () => {
     let greeting: MailCase;
     let end: MailCase;
