@@ -111,6 +111,7 @@ const ledger: readonly RepositoryCalls[] = [
     insertVoid: ({ darkroomId, hold: actionId, load: voidedActionId }) => [
       { darkroomId, actionId, voidedActionId },
     ],
+    names: (i) => [i.darkroomId, [i.hold]],
     isVoided: (i) => [i.darkroomId, i.voidedLoad],
     voidedBy: (i) => [i.darkroomId, i.void],
     withPeople: (i) => [i.darkroomId, [i.voidedLoad]],

@@ -1,6 +1,8 @@
 import { Injectable } from '@nestjs/common';
 import { sql, type SQL } from 'drizzle-orm';
 import type { Tx } from '../../platform/database/database.js';
+import { ActionsRepository } from '../../platform/ledger/actions.repository.js';
+import { withHolders } from '../../platform/ledger/holders.js';
 import type { Touched } from '../../platform/ledger/void-handlers.js';
 import { ChemistryDocuments } from '../chemistries/chemistry-documents.js';
 import type { AlertFacts, BottleFacts } from './alert-facts.js';
@@ -16,12 +18,9 @@ const bottlesOf =
   (darkroomId: string) =>
   (ids: SQL): SQL => sql`
   select json_agg(json_build_object(
-    'id', b.id, 'code', b.code, 'chemistryVersionId', b.chemistry_version_id, 'totals', t.totals,
-    'holdBy', m.display_name))
+    'id', b.id, 'code', b.code, 'chemistryVersionId', b.chemistry_version_id, 'totals', t.totals))
   from bottles b
   join bottle_totals t on t.darkroom_id = b.darkroom_id and t.bottle_id = b.id
-  left join actions a on a.darkroom_id = b.darkroom_id and a.id = (t.totals #>> '{hold,actionId}')::uuid
-  left join memberships m on m.darkroom_id = a.darkroom_id and m.id = a.membership_id
   where b.darkroom_id = ${darkroomId} and b.id = ${ids}`;
 
 const packsOf =
@@ -68,12 +67,15 @@ const eventsOf =
     from events where darkroom_id = ${darkroomId} and subject_id = ${ids}
     order by subject_id, kind, crossing desc) e`;
 
-type FoundBottle = Omit<BottleFacts, 'document'> & { chemistryVersionId: string };
+type FoundBottle = Omit<BottleFacts, 'document' | 'holdBy'> & { chemistryVersionId: string };
 type FoundFacts = Omit<AlertFacts, 'bottles'> & { bottles: FoundBottle[] };
 
 @Injectable()
 export class FactsRepository {
-  constructor(private readonly documents: ChemistryDocuments) {}
+  constructor(
+    private readonly documents: ChemistryDocuments,
+    private readonly actions: ActionsRepository,
+  ) {}
 
   /** Everything that warnings about these subjects are judged by, in one statement. Unknown ids are left out. */
   async read(
@@ -88,6 +90,7 @@ export class FactsRepository {
       ${orNone(loadActionIds, loadsOf(darkroomId))} as loads,
       ${orNone(all, eventsOf(darkroomId))} as events`);
     if (!row) throw new Error('A select without a from gave no row.');
-    return { ...row, bottles: await this.documents.with(tx, darkroomId, row.bottles) };
+    const named = await withHolders(this.actions, tx, darkroomId, row.bottles);
+    return { ...row, bottles: await this.documents.with(tx, darkroomId, named) };
   }
 }

@@ -6,6 +6,8 @@ import { alias } from 'drizzle-orm/pg-core';
 import { validate } from 'uuid';
 import type { Tx } from '../../platform/database/database.js';
 import { hotQuery, isAnyOf } from '../../platform/database/hot-query.js';
+import { ActionsRepository } from '../../platform/ledger/actions.repository.js';
+import { withHolders } from '../../platform/ledger/holders.js';
 import { ChemistryDocuments } from '../chemistries/chemistry-documents.js';
 import type { LockedBottle } from './bottle-row.js';
 
@@ -16,8 +18,6 @@ export interface TotalsRow {
   nextLookAt: string | null;
 }
 
-const holdActions = alias(actions, 'hold_actions');
-const holders = alias(memberships, 'holders');
 const mixers = alias(memberships, 'mixers');
 
 export type BottleDetail = Awaited<ReturnType<BottlesRepository['details']>>[number];
@@ -72,7 +72,6 @@ const details = (name: string, wanted: SQL) =>
         costMinor: bottles.costMinor,
         currency: bottles.currency,
         mixedBy: mixers.displayName,
-        holdBy: holders.displayName,
       })
       .from(bottles)
       .innerJoin(
@@ -84,17 +83,6 @@ const details = (name: string, wanted: SQL) =>
         and(eq(actions.darkroomId, bottles.darkroomId), eq(actions.id, bottles.madeByActionId)),
       )
       .innerJoin(mixers, and(eq(mixers.darkroomId, actions.darkroomId), eq(mixers.id, actions.membershipId)))
-      .leftJoin(
-        holdActions,
-        and(
-          eq(holdActions.darkroomId, bottles.darkroomId),
-          sql`${holdActions.id} = (${bottleTotals.totals} -> 'hold' ->> 'actionId')::uuid`,
-        ),
-      )
-      .leftJoin(
-        holders,
-        and(eq(holders.darkroomId, holdActions.darkroomId), eq(holders.id, holdActions.membershipId)),
-      )
       .where(and(eq(bottles.darkroomId, sql.placeholder('darkroomId')), wanted))
       .orderBy(asc(bottles.code)),
   );
@@ -106,7 +94,10 @@ const detailsNamed = details('bottles_named', isAnyOf(bottles.id, 'ids'));
 
 @Injectable()
 export class BottlesRepository {
-  constructor(private readonly documents: ChemistryDocuments) {}
+  constructor(
+    private readonly documents: ChemistryDocuments,
+    private readonly actions: ActionsRepository,
+  ) {}
 
   /** Locks the totals of these bottles, in the order of their ids, and reads what their rules need. Unknown ids are left out. */
   async lock(tx: Tx, darkroomId: string, ids: readonly string[]): Promise<LockedBottle[]> {
@@ -166,7 +157,8 @@ export class BottlesRepository {
       typeof which === 'string'
         ? await detailsOf[which](tx, { darkroomId })
         : await detailsNamed(tx, { darkroomId, ids: [...which.ids] });
-    return this.documents.with(tx, darkroomId, rows);
+    const named = await withHolders(this.actions, tx, darkroomId, rows);
+    return this.documents.with(tx, darkroomId, named);
   }
 
   async findId(tx: Tx, darkroomId: string, idOrCode: string): Promise<string | null> {

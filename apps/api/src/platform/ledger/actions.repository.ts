@@ -51,11 +51,29 @@ const actionsWithPeople = hotQuery('actions_with_people', (db) =>
     .where(and(eq(actions.darkroomId, sql.placeholder('darkroomId')), isAnyOf(actions.id, 'ids'))),
 );
 
+const namesOf = hotQuery('names_of_actions', (db) =>
+  db
+    .select({ id: actions.id, name: memberships.displayName })
+    .from(actions)
+    .innerJoin(
+      memberships,
+      and(eq(memberships.darkroomId, actions.darkroomId), eq(memberships.id, actions.membershipId)),
+    )
+    .where(and(eq(actions.darkroomId, sql.placeholder('darkroomId')), isAnyOf(actions.id, 'ids'))),
+);
+
 @Injectable()
 export class ActionsRepository {
   async find(tx: Tx, darkroomId: string, id: string): Promise<ActionRow | null> {
     const [row] = await findAction(tx, { darkroomId, id });
     return row ?? null;
+  }
+
+  /** Who did these actions, by the actions' ids. */
+  async names(tx: Tx, darkroomId: string, ids: readonly string[]): Promise<Map<string, string>> {
+    if (ids.length === 0) return new Map();
+    const rows = await namesOf(tx, { darkroomId, ids: [...ids] });
+    return new Map(rows.map(({ id, name }) => [id, name]));
   }
 
   /** @returns the server's place in the order */

@@ -62,7 +62,12 @@ export function BottleActions({ standing }: { standing: Standing }) {
       <LazyLoadSheet sheet={sheet} standings={[standing]} />
       <HoldSheet bottle={bottle} open={doing === 'hold'} onClose={close('hold')} />
       <ReleaseSheet bottle={bottle} open={doing === 'release'} onClose={close('release')} />
-      <DiscardSheet bottle={bottle} document={document} open={doing === 'discard'} onClose={close('discard')} />
+      <DiscardSheet
+        bottle={bottle}
+        document={document}
+        open={doing === 'discard'}
+        onClose={close('discard')}
+      />
     </Flex>
   );
 }
