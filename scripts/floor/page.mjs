@@ -13,7 +13,8 @@ const times = (/** @type {number} */ value) => `${value.toFixed(2)} ×`;
 export function page({ results, stores, frames, recorded, seconds, rounds }, of) {
   const day = new Date(performance.timeOrigin + performance.now()).toISOString().slice(0, 10);
   const [small, large] = stores;
-  const [darkroom] = recorded.darkrooms;
+  // The last: by then its connection had every plan, and statements that may go together did.
+  const darkroom = recorded.darkrooms.at(-1);
   const turns = (/** @type {any[]} */ list) => new Set(list.map(({ turn }) => turn)).size;
   const floorRows = results.map((/** @type {any} */ { kind, connections, by }) => {
     const floor = by['floor on small'];
